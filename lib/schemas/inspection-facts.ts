@@ -45,16 +45,14 @@ export function inspectionFacts(state: WalkState): InspectionFacts {
     skips: state.skips
       .filter(stands)
       .map(({ id, receptacleId, areaId, reason, note }) => ({ id, receptacleId, areaId, reason, note })),
-    photos: state.photos
-      .filter(stands)
-      .map(({ id, receptacleId, areaId, circuitId, caption, order }) => ({
-        id,
-        receptacleId,
-        areaId,
-        circuitId,
-        caption,
-        order,
-      })),
+    photos: state.photos.filter(stands).map(({ id, receptacleId, areaId, circuitId, caption, order }) => ({
+      id,
+      receptacleId,
+      areaId,
+      circuitId,
+      caption,
+      order,
+    })),
     notices: state.notices,
   };
 }

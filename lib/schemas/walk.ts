@@ -91,5 +91,8 @@ export type WalkState = {
   conflicts: WalkConflict[];
 };
 
+/** Who is signed in on this phone; answer to GET /api/me. */
+export type WalkPerson = { userId: string; membershipId: string; name: string };
+
 /** Answer to GET /api/inspections/[inspectionId]/walk: the state, who asks, and this browser's last counted operation. */
-export type WalkAnswer = { state: WalkState; me: { membershipId: string; name: string }; lastMutation: number };
+export type WalkAnswer = { state: WalkState; me: WalkPerson; lastMutation: number };
