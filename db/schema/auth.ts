@@ -47,6 +47,8 @@ export const memberships = pgTable(
     signatureName: text(),
     /** Object key of the drawn signature. */
     signatureKey: text(),
+    /** Set while the invitation waits; accepting it clears it, and until then the membership opens nothing. */
+    invitedAt: instant(),
     disabledAt: instant(),
     ...createdAt,
   },
@@ -74,6 +76,8 @@ export const sessions = pgTable(
 /** One-time links of our own: the token is mailed, its hash is stored, a POST uses it up. */
 export const linkTokens = pgTable('link_tokens', {
   tokenHash: bytea().primaryKey(),
+  /** Of the e-mail and the short code that the same mail carries, for a reader without script. */
+  codeHash: bytea().notNull().unique(),
   purpose: linkPurpose().notNull(),
   email: text().notNull(),
   userId: uuid(),
