@@ -40,7 +40,7 @@ export type Walk = {
 };
 
 let opened: PhoneStore | undefined;
-function phoneStore(): PhoneStore {
+export function phoneStore(): PhoneStore {
   opened ??= openPhoneStore();
   return opened;
 }
