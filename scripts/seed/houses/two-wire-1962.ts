@@ -1,0 +1,183 @@
+import type { HousePlan } from '../plan';
+
+/** North Carolina, 1962: two-wire cable, three-slot receptacles put in later, one GFCI without a ground. */
+export const twoWireHouse: HousePlan = {
+  booking: {
+    address: { street: '27 Quarry Bend', city: 'Alder Notch', county: 'Penlow', state: 'NC', zip: '28199' },
+    timeZone: 'America/New_York',
+    stateProfile: 'NC',
+    yearBuilt: 1962,
+    wiringMethod: 'two-wire',
+    buyerName: 'Imani Castellanos',
+    buyerEmail: 'imani@castellanos.example',
+    buyerPhone: '555-0134',
+    agentName: 'Rowan Teller',
+    agentEmail: 'rowan@millbrook-realty.example',
+    occupied: true,
+    utilitiesOn: true,
+  },
+  visit: { days: -1, at: '09:00' },
+  codeEdition: { edition: 1959, source: 'Taken from the year built; the town was not asked' },
+  serviceAmps: 100,
+  upTo: 'in-review',
+  panels: [
+    {
+      name: 'Main',
+      kind: 'main',
+      place: 'Basement, north wall',
+      circuits: [
+        { breaker: '1', amps: 20, wireAwg: 12, label: 'Kitchen', protection: 'none' },
+        { breaker: '3', amps: 15, wireAwg: 14, label: 'Bedrooms', protection: 'none' },
+        { breaker: '5', amps: 20, wireAwg: 14, label: 'Living rm', protection: 'none' },
+        { breaker: '7', amps: 15, wireAwg: 14, label: 'Bath, hall', protection: 'none' },
+        { breaker: '9', amps: 15, wireAwg: 14, label: 'Garage', protection: 'none' },
+        { breaker: '2/4', amps: 30, poles: 2, wireAwg: 10, label: 'Dryer', protection: 'none' },
+      ],
+    },
+  ],
+  areas: [
+    {
+      name: 'Outside',
+      place: 'outdoors',
+      floor: 1,
+      gradeAccess: true,
+      points: [
+        {
+          label: 'front porch',
+          lamps: '100',
+          cover: 'flap',
+          circuit: 'Main/5',
+          gfci: { device: 'downstream', deviceFound: false, button: 'no-trip', faceDead: false },
+          photo: 'Porch receptacle under its flap cover',
+        },
+        {
+          label: 'patio',
+          lamps: '011',
+          loadsUnplugged: 'no',
+          cover: 'flap',
+          circuit: 'Main/9',
+          photo: 'Three-lamp tester, two lower lamps lit',
+        },
+      ],
+    },
+    {
+      name: 'Garage',
+      place: 'garage',
+      floor: 1,
+      points: [
+        {
+          label: 'bench, left',
+          lamps: '110',
+          circuit: 'Main/9',
+          volts: { hn: 119.8, hg: 119.7, ng: 0, meter: 'high-impedance' },
+          sensor: { hotSlot: false, groundSlot: true, coverScrew: true },
+          told: { whom: 'Occupant, Dell Arden', note: 'Breaker 9 off and taped' },
+          photo: 'Sensor responds at the cover screw',
+        },
+        { label: 'by the door', lamps: '000', circuit: 'Main/9', powerChecked: true },
+        { label: 'door opener', skip: { reason: 'out-of-reach', note: 'Ceiling, car parked below' } },
+      ],
+    },
+    {
+      name: 'Kitchen',
+      place: 'kitchen-counter',
+      floor: 1,
+      points: [
+        {
+          label: 'left of sink',
+          device: 'gfci-receptacle',
+          lamps: '100',
+          circuit: 'Main/1',
+          sinkFt: 2,
+          gfci: {
+            device: 'receptacle',
+            button: 'trips',
+            faceDead: true,
+            tester: 'no-trip',
+            resets: true,
+            wentDead: ['right of sink'],
+          },
+          photo: 'GFCI left of the sink, no mark on its plate',
+        },
+        {
+          label: 'right of sink',
+          lamps: '100',
+          circuit: 'Main/1',
+          sinkFt: 4,
+          gfci: { device: 'downstream', button: 'trips', faceDead: true, resets: true, upstream: 'left of sink' },
+        },
+        { label: 'refrigerator', skip: { reason: 'blocked', note: 'Behind the refrigerator' } },
+      ],
+    },
+    {
+      name: 'Hall bath',
+      place: 'bathroom',
+      floor: 1,
+      points: [
+        {
+          label: 'by the basin',
+          device: 'gfci-receptacle',
+          lamps: '110',
+          circuit: 'Main/7',
+          sinkFt: 1.5,
+          gfci: { device: 'receptacle', button: 'trips', faceDead: false, tester: 'no-trip' },
+          told: { whom: 'Occupant, Dell Arden', note: 'Breaker 7 off' },
+          photo: 'Lamps stay lit after the test button',
+        },
+      ],
+    },
+    {
+      name: 'Living room',
+      place: 'living-room',
+      floor: 1,
+      points: [
+        { label: 'north wall', lamps: '110', circuit: 'Main/5' },
+        {
+          label: 'by the window',
+          lamps: '101',
+          circuit: 'Main/5',
+          volts: { hn: 120.4, hg: 0.3, ng: 120.1, meter: 'low-impedance' },
+        },
+        { label: 'by the stairs', pattern: '1-15R', lamps: '100', circuit: 'Main/5' },
+      ],
+    },
+    {
+      name: 'Bedroom 1',
+      place: 'bedroom',
+      floor: 2,
+      points: [
+        { label: 'bed, left', lamps: '100', circuit: 'Main/3' },
+        { label: 'bed, right', lamps: '100', circuit: 'Main/3' },
+        { label: 'dresser', lamps: '100', circuit: 'Main/3', signs: ['weak-grip'] },
+      ],
+    },
+    {
+      name: 'Basement',
+      place: 'basement',
+      alsoPlace: 'laundry-area',
+      floor: 0,
+      finished: false,
+      points: [
+        {
+          label: 'washer',
+          lamps: '110',
+          circuit: 'Main/1',
+          nearBondedPanel: true,
+          gfci: { device: 'downstream', deviceFound: false, button: 'no-trip', faceDead: false, tester: 'no-trip' },
+        },
+        {
+          label: 'dryer',
+          pattern: '10-30R',
+          circuit: 'Main/2/4',
+          skip: { reason: 'in-use', note: 'Dryer plugged in, not moved' },
+        },
+        {
+          label: 'sump pit',
+          lamps: '110',
+          doNotTrip: 'sump-pump',
+          gfci: { device: 'downstream', notTestedReason: 'Feeds the sump pump' },
+        },
+      ],
+    },
+  ],
+};
