@@ -1,13 +1,14 @@
 import { env } from '@/lib/env';
 
 /**
- * Whether a writing request came from a page of ours. Browsers send Origin with every POST, PUT, PATCH and DELETE;
- * a request without one is refused, and so is a form of another site that rides on the cookie.
+ * Whether a writing request came from a page of ours. Browsers send Origin with every POST, PUT, PATCH and DELETE; a form
+ * on a page without referrer sends "null", and then the browser's own word that the sites are the same must stand in.
  */
 export function isSameOrigin(request: Request): boolean {
+  const origin = request.headers.get('origin');
   const site = request.headers.get('sec-fetch-site');
-  if (site !== null && site !== 'same-origin') return false;
-  return request.headers.get('origin') === new URL(env.APP_URL).origin;
+  if (origin === null || origin === 'null') return origin === 'null' && site === 'same-origin';
+  return origin === new URL(env.APP_URL).origin && (site === null || site === 'same-origin');
 }
 
 /** The answer to a writing request from elsewhere. */

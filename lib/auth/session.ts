@@ -8,7 +8,7 @@ import { VISITOR, type MemberActor } from '@/db/actor';
 import { endSession, findSessionMember, openSession } from '@/db/auth';
 import type { Role } from '@/db/roles';
 import { env } from '@/lib/env';
-import { COOKIE_ATTRIBUTES, SESSION_COOKIE, SESSION_SECONDS } from './cookies';
+import { cookieAttributes, SESSION_SECONDS, sessionCookieName } from './cookies';
 
 /**
  * Who is signed in, or null. The cookie only names a session; its row decides at each request, once, so that a person
@@ -35,7 +35,7 @@ export async function startSession(userId: string, firmId: string | null = null)
 
   if (earlier !== null) await endSession(VISITOR, hashSessionId(earlier));
   const token = await encode({ token: { sid: sessionId }, secret: env.AUTH_SECRET, maxAge: SESSION_SECONDS });
-  (await cookies()).set(SESSION_COOKIE, token, { ...COOKIE_ATTRIBUTES, maxAge: SESSION_SECONDS });
+  (await cookies()).set(sessionCookieName(), token, { ...cookieAttributes(), maxAge: SESSION_SECONDS });
   return true;
 }
 
@@ -49,7 +49,7 @@ export async function createSession(userId: string, firmId: string | null, userA
 export async function endCurrentSession(): Promise<void> {
   const sessionId = await readSessionId();
   if (sessionId !== null) await endSession(VISITOR, hashSessionId(sessionId));
-  (await cookies()).set(SESSION_COOKIE, '', { ...COOKIE_ATTRIBUTES, maxAge: 0 });
+  (await cookies()).set(sessionCookieName(), '', { ...cookieAttributes(), maxAge: 0 });
 }
 
 /** The hash of this browser's session, to keep it while others end. */
@@ -67,7 +67,7 @@ export function hashSessionId(sessionId: string): Buffer {
  * session address shows to scripts.
  */
 async function readSessionId(): Promise<string | null> {
-  const token = (await cookies()).get(SESSION_COOKIE)?.value;
+  const token = (await cookies()).get(sessionCookieName())?.value;
   if (!token) return null;
   const payload = await decode({ token, secret: env.AUTH_SECRET }).catch(() => null);
   return typeof payload?.sid === 'string' ? payload.sid : null;

@@ -50,10 +50,10 @@ export function forgetAttempts(email: string): Promise<void> {
   return clearAttempts(VISITOR, accountKey('sign-in', email));
 }
 
-/** The address next to the trusted proxies; without one, what the server saw. The header's left end is the caller's word. */
+/** The last hop that is not a proxy of ours: what stands left of it is the caller's own word. */
 export function visitorOf(requestHeaders: Headers): Visitor {
   const hops = (requestHeaders.get('x-forwarded-for') ?? '').split(',').map((hop) => hop.trim());
-  const address = hops.at(-Math.max(1, env.TRUSTED_PROXIES)) ?? hops[0] ?? '';
+  const address = hops.findLast((hop) => !env.TRUSTED_PROXIES.includes(hop)) ?? hops[0] ?? '';
   return { address, userAgent: requestHeaders.get('user-agent') ?? '' };
 }
 
