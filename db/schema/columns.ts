@@ -4,5 +4,9 @@ import { customType, timestamp, uuid } from 'drizzle-orm/pg-core';
 export const firmKey = { firmId: uuid().notNull(), id: uuid().notNull() };
 export const instant = () => timestamp({ withTimezone: true });
 export const createdAt = { createdAt: timestamp({ withTimezone: true }).notNull().defaultNow() };
-/** Number of the last change per field, and the inspection's version at which the row last changed. */
+/** Per field, the inspection's version at its last change. */
+export type Revisions = Record<string, number>;
+/** Per field, who changed it last: the browser (null from the desk), the member, and when it was captured there. */
+export type Writers = Record<string, { client: string | null; membershipId: string; at: string }>;
 export const bytea = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => 'bytea' });
+export const tsvector = customType<{ data: string }>({ dataType: () => 'tsvector' });

@@ -1,3 +1,4 @@
+import { sql } from 'drizzle-orm';
 import {
   boolean,
   doublePrecision,
@@ -31,7 +32,7 @@ import {
   YES_NO_UNKNOWN,
 } from '@/lib/findings/vocabulary';
 import { memberships } from './auth';
-import { createdAt, firmKey, instant } from './columns';
+import { createdAt, firmKey, instant, tsvector, type Revisions, type Writers } from './columns';
 import { firms, stateProfile, type Address } from './firms';
 
 export const inspectionState = pgEnum('inspection_state', INSPECTION_STATES);
@@ -55,9 +56,13 @@ export const visitKind = pgEnum('visit_kind', VISIT_KINDS);
 export const PARTY_KINDS = ['buyer', 'agent', 'seller', 'electrician', 'occupant', 'other'] as const;
 export const partyKind = pgEnum('party_kind', PARTY_KINDS);
 
-/** `revisions` numbers the last change of each field; `version` is the inspection's at that change; `deletedAt` is a tombstone. */
+/**
+ * `revisions` holds, per field, the inspection's version at its last change, and `writers` who made it; `version` is that of
+ * the row's last change; `deletedAt` is a tombstone. The field `contents` stands for what was recorded inside the row.
+ */
 const tracked = {
-  revisions: jsonb().$type<Record<string, number>>().notNull().default({}),
+  revisions: jsonb().$type<Revisions>().notNull().default({}),
+  writers: jsonb().$type<Writers>().notNull().default({}),
   version: integer().notNull(),
   deletedAt: instant(),
   ...createdAt,
@@ -70,8 +75,12 @@ export const inspections = pgTable(
     number: integer().notNull(),
     state: inspectionState().notNull().default('booked'),
     address: jsonb().$type<Address>().notNull(),
-    /** Lower-case address, buyer and number in one line, for the list's search. */
+    /** Number, address and parties as plain lower-case words with one space between, for the list's search. */
     searchText: text().notNull(),
+    /** The words, and the firm as one more, so that the index answers for one firm without an extension. */
+    searchWords: tsvector().generatedAlwaysAs(
+      sql`array_to_tsvector(string_to_array(replace(firm_id::text, '-', '') || ' ' || search_text, ' '))`,
+    ),
     timeZone: text().notNull(),
     stateProfile: stateProfile().notNull(),
     scheduledAt: instant().notNull(),
@@ -98,6 +107,7 @@ export const inspections = pgTable(
     index().on(table.firmId, table.scheduledAt.desc(), table.id),
     index().on(table.firmId, table.state, table.scheduledAt.desc(), table.id),
     index().on(table.firmId, table.number, table.id),
+    index().using('gin', table.searchWords),
   ],
 );
 

@@ -10,7 +10,7 @@ import {
   text,
   uuid,
 } from 'drizzle-orm/pg-core';
-import { createdAt, firmKey, instant } from './columns';
+import { createdAt, firmKey, instant, type Revisions, type Writers } from './columns';
 import { areas, circuits, inspections, receptacles } from './inspections';
 
 export const PHOTO_STATES = ['announced', 'stored', 'refused'] as const;
@@ -39,7 +39,8 @@ export const photos = pgTable(
     markings: jsonb().$type<unknown[]>().notNull().default([]),
     takenAt: instant(),
     storedAt: instant(),
-    revisions: jsonb().$type<Record<string, number>>().notNull().default({}),
+    revisions: jsonb().$type<Revisions>().notNull().default({}),
+    writers: jsonb().$type<Writers>().notNull().default({}),
     version: integer().notNull(),
     deletedAt: instant(),
     ...createdAt,

@@ -55,11 +55,17 @@ export const conflicts = pgTable(
     entity: text().notNull(),
     entityId: uuid().notNull(),
     field: text().notNull(),
+    /** The value that stands, by whom and when. */
     theirs: jsonb().$type<unknown>(),
+    theirMembershipId: uuid(),
+    theirCapturedAt: instant(),
+    /** The value that was refused, by whom and when. */
     yours: jsonb().$type<unknown>(),
     membershipId: uuid().notNull(),
     capturedAt: instant().notNull(),
     resolvedAt: instant(),
+    resolvedBy: uuid(),
+    kept: text(),
     version: integer().notNull(),
     ...createdAt,
   },

@@ -1,0 +1,41 @@
+import 'server-only';
+import { sql } from 'drizzle-orm';
+import type { Actor } from './actor';
+import { database, type Database } from './client';
+
+export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
+
+/**
+ * Runs `work` in one transaction that row security reads the actor from. The settings end with the transaction, so a
+ * connection goes back to the pool without a firm. Rolls back and throws what `work` throws.
+ */
+export async function withActor<Result>(actor: Actor, work: (tx: Transaction) => Promise<Result>): Promise<Result> {
+  return database().transaction(async (tx) => {
+    const { firmId, userId, membershipId, grantId, name } = settingsOf(actor);
+    await tx.execute(sql`select
+      set_config('app.kind', ${actor.kind}, true), set_config('app.firm_id', ${firmId}, true),
+      set_config('app.user_id', ${userId}, true), set_config('app.membership_id', ${membershipId}, true),
+      set_config('app.grant_id', ${grantId}, true), set_config('app.name', ${name}, true)`);
+    return work(tx);
+  });
+}
+
+type Settings = { firmId: string; userId: string; membershipId: string; grantId: string; name: string };
+const NOBODY: Settings = { firmId: '', userId: '', membershipId: '', grantId: '', name: '' };
+
+function settingsOf(actor: Actor): Settings {
+  switch (actor.kind) {
+    case 'member':
+      return { ...NOBODY, ...pick(actor), userId: actor.userId, membershipId: actor.membershipId };
+    case 'recipient':
+      return { ...NOBODY, ...pick(actor), grantId: actor.grantId };
+    case 'system':
+      return { ...NOBODY, firmId: actor.firmId, name: actor.task };
+    case 'visitor':
+      return NOBODY;
+  }
+}
+
+function pick({ firmId, name }: { firmId: string; name: string }) {
+  return { firmId, name };
+}
