@@ -1,3 +1,1 @@
-/** What a membership may do; one person can hold several. */
-export const ROLES = ['owner', 'office', 'inspector'] as const;
-export type Role = (typeof ROLES)[number];
+export { ROLES, type Role } from '@/lib/schemas/roles';

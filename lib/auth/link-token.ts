@@ -1,4 +1,5 @@
 import { createHash, randomBytes, randomInt } from 'node:crypto';
+import { env } from '@/lib/env';
 
 /** Letters and figures that are not mistaken for each other when copied from a mail by hand. */
 const CODE_ALPHABET = '23456789ABCDEFGHJKMNPQRSTVWXYZ';
@@ -28,4 +29,10 @@ export function hashCode(email: string, code: string): Buffer {
 
 function printedCode(code: string): string {
   return `${code.slice(0, CODE_LENGTH / 2)}-${code.slice(CODE_LENGTH / 2)}`;
+}
+
+/** What a mail carries, with the hashes that are stored. The address comes from the settings, never from a request. */
+export function mintMailedLink(email: string): { tokenHash: Buffer; codeHash: Buffer; address: string; code: string } {
+  const { token, code, tokenHash, codeHash } = mintLink(email);
+  return { tokenHash, codeHash, code, address: `${new URL(env.APP_URL).origin}/open#${token}` };
 }

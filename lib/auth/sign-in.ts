@@ -35,6 +35,11 @@ export function codeAttempt(email: string, visitor: Visitor): Promise<number> {
   return attemptAllowed('code', email, visitor, PER_ACCOUNT);
 }
 
+/** Seconds to wait before a signed-in person may try their present password again; counted with their sign-ins. */
+export function passwordAttempt(email: string): Promise<number> {
+  return takeAttempt(VISITOR, accountKey('sign-in', email), PER_ACCOUNT);
+}
+
 /** Seconds to wait before another mail may be asked for; 0 to go on. */
 export function mailAttempt(email: string, visitor: Visitor): Promise<number> {
   return attemptAllowed('mail', email, visitor, MAILS_PER_ACCOUNT);
@@ -43,6 +48,16 @@ export function mailAttempt(email: string, visitor: Visitor): Promise<number> {
 /** Seconds to wait before this address may open links, or found firms, again; 0 to go on. */
 export function addressAttempt(what: 'open' | 'sign-up', visitor: Visitor): Promise<number> {
   return takeAttempt(VISITOR, addressKey(what, visitor), PER_ADDRESS);
+}
+
+/** A link or code that opened something does not count against the reader. */
+export function forgiveAddress(what: 'open', visitor: Visitor): Promise<void> {
+  return giveBackAttempt(VISITOR, addressKey(what, visitor));
+}
+
+export async function forgiveCode(email: string, visitor: Visitor): Promise<void> {
+  await clearAttempts(VISITOR, accountKey('code', email));
+  await giveBackAttempt(VISITOR, addressKey('code', visitor));
 }
 
 /** A person who proved their mailbox starts over with sign-in attempts. */
