@@ -1,9 +1,14 @@
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
-const root = fileURLToPath(new URL('.', import.meta.url));
+const root = fileURLToPath(new URL('.', import.meta.url)).replace(/\/$/, '');
 
 export default defineConfig({
-  resolve: { alias: { '@': root.replace(/\/$/, ''), 'server-only': `${root}scripts/empty.ts` } },
-  test: { include: ['tests/**/*.test.{ts,tsx}'], testTimeout: 30_000, hookTimeout: 60_000 },
+  resolve: { alias: { '@': root, 'server-only': `${root}/scripts/empty.ts` } },
+  test: {
+    include: ['tests/**/*.test.{ts,tsx}'],
+    testTimeout: 60_000,
+    hookTimeout: 120_000,
+    passWithNoTests: true,
+  },
 });
