@@ -7,7 +7,7 @@ import type { WalkState } from '@/lib/schemas/walk';
 import type { Walk } from '@/lib/walk/use-walk';
 import { PLACE_LABELS } from './labels';
 import { areasInOrder, beadOf, countArea, countWords, receptaclesOf, type Bead } from './progress';
-import { addressOf } from './walk-address';
+import { addressOf, goTo } from './walk-address';
 import { WalkButton } from './walk-button';
 
 const BEADS: Record<Bead, string> = { correct: '●', fault: '☒', off: '◐', skipped: '–', untested: '○' };
@@ -99,7 +99,7 @@ function AddArea({ walk, state, first, onDone }: { walk: Walk; state: WalkState;
       { op: 'area.add', id, fields: { structureId, place, name, order, floor: place === 'basement' ? 0 : 1 } },
     ]);
     onDone();
-    location.hash = addressOf(state.inspection.id, { kind: 'area', areaId: id });
+    goTo(state.inspection.id, { kind: 'area', areaId: id });
   }
 
   return (

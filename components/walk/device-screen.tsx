@@ -13,7 +13,7 @@ import type { WalkReceptacle, WalkState } from '@/lib/schemas/walk';
 import type { Walk } from '@/lib/walk/use-walk';
 import { COVER_LABELS, DEVICE_LABELS, DO_NOT_TRIP_LABELS, MARK_LABELS } from './labels';
 import { PhysicalSigns } from './physical-signs';
-import { addressOf } from './walk-address';
+import { addressOf, goTo } from './walk-address';
 import { Choices, WalkButton } from './walk-button';
 
 type Patch = Partial<Omit<WalkReceptacle, 'id' | 'revisions' | 'version' | 'deleted'>>;
@@ -40,7 +40,7 @@ export function DeviceScreen({
   };
   async function remove() {
     await walk.save([{ op: 'receptacle.remove', id: receptacle.id, base: receptacle.revisions }]);
-    location.hash = addressOf(state.inspection.id, { kind: 'area', areaId: receptacle.areaId });
+    goTo(state.inspection.id, { kind: 'area', areaId: receptacle.areaId });
   }
   const area = state.areas.find((row) => row.id === receptacle.areaId);
 

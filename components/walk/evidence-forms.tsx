@@ -1,7 +1,7 @@
 'use client';
 
 import { zodResolver } from '@hookform/resolvers/zod';
-import { useForm, type FieldError, type UseFormRegisterReturn } from 'react-hook-form';
+import { useForm, useWatch, type FieldError, type UseFormRegisterReturn } from 'react-hook-form';
 import { z } from 'zod';
 import type { ContactSensor, LoadTest, VoltTrio } from '@/lib/findings/facts';
 import { loadTestSchema, voltTrioSchema, wiringEvidenceSchema } from '@/lib/schemas/reading';
@@ -10,6 +10,7 @@ import { Choices, WalkButton } from './walk-button';
 /** Three voltages between the slots, with the meter that was used. */
 export function MeterForm({ meter, onSave }: { meter: VoltTrio['meter']; onSave: (trio: VoltTrio) => Promise<void> }) {
   const form = useForm<VoltTrio>({ resolver: zodResolver(voltTrioSchema), defaultValues: { meter } });
+  const usedMeter = useWatch({ control: form.control, name: 'meter' });
   const { errors } = form.formState;
   return (
     <form className="grid gap-3" noValidate onSubmit={(event) => void form.handleSubmit(onSave)(event)}>
@@ -19,7 +20,7 @@ export function MeterForm({ meter, onSave }: { meter: VoltTrio['meter']; onSave:
           ['high-impedance', 'High impedance'],
           ['low-impedance', 'Low impedance'],
         ]}
-        value={form.watch('meter')}
+        value={usedMeter}
         onChange={(value) => value && form.setValue('meter', value)}
       />
       <div className="grid grid-cols-3 gap-2">

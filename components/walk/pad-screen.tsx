@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useState } from 'react';
 import { v7 as uuidv7 } from 'uuid';
 import type { LampPattern } from '@/lib/findings/facts';
 import { SKIP_REASONS, type Lamp, type SkipReason } from '@/lib/findings/vocabulary';
@@ -10,7 +10,7 @@ import { LampPad, type TappedLamps } from './lamp-pad';
 import { lampsInWords, readsCorrect, SKIP_LABELS } from './labels';
 import { PhotoButton } from './photo-button';
 import { receptacleName, receptaclesOf, skipOf, standingReadings } from './progress';
-import { addressOf } from './walk-address';
+import { addressOf, goTo } from './walk-address';
 import { WalkButton } from './walk-button';
 
 const CORRECT: LampPattern = { hn: 'lit', hg: 'lit', ng: 'off' };
@@ -32,15 +32,16 @@ export function PadScreen({
 }) {
   const rows = receptaclesOf(state, area.id);
   const current = rows.find((row) => row.id === receptacleId) ?? firstUntested(state, rows);
-  const [lamps, setLamps] = useState<TappedLamps>({});
+  const [tapped, setTapped] = useState<{ on?: string; lamps: TappedLamps }>({ lamps: {} });
   const [skipping, setSkipping] = useState(false);
   const [logged, setLogged] = useState<Logged | null>(null);
+  // Lamps tapped for one receptacle never stand for the next.
+  const lamps = tapped.on === current?.id ? tapped.lamps : {};
+  const setLamps = (next: TappedLamps) => setTapped({ on: current?.id, lamps: next });
   const inspectionId = state.inspection.id;
   const name = current ? receptacleName(state, current) : `Receptacle ${rows.length + 1}`;
   const twoSlot = current?.pattern === '1-15R';
   const untouched = Object.values(lamps).every((lamp) => lamp === undefined);
-
-  useEffect(() => setLamps({}), [current?.id]);
 
   async function log(pattern: LampPattern) {
     const { id, drafts } = ensureReceptacle(state, area, rows, current);
@@ -54,8 +55,8 @@ export function PadScreen({
       words: `${name}, ${readsCorrect(pattern) ? 'lamps correct' : lampsInWords(pattern)}`,
       undo: undoOf(readingId, id, drafts),
     });
-    if (readsCorrect(pattern)) location.hash = addressOf(inspectionId, { kind: 'area', areaId: area.id });
-    else location.hash = addressOf(inspectionId, { kind: 'result', receptacleId: id });
+    if (readsCorrect(pattern)) goTo(inspectionId, { kind: 'area', areaId: area.id });
+    else goTo(inspectionId, { kind: 'result', receptacleId: id });
   }
 
   async function skip(reason: SkipReason) {
@@ -64,7 +65,7 @@ export function PadScreen({
     await walk.save([...drafts, { op: 'skip.add', id: skipId, receptacleId: id, reason }]);
     setSkipping(false);
     setLogged({ words: `${name}, skipped`, undo: [{ op: 'skip.remove', id: skipId, base: {} }] });
-    location.hash = addressOf(inspectionId, { kind: 'area', areaId: area.id });
+    goTo(inspectionId, { kind: 'area', areaId: area.id });
   }
 
   async function photoSubject() {

@@ -5,7 +5,7 @@ import { v7 as uuidv7 } from 'uuid';
 import type { WalkReceptacle, WalkState } from '@/lib/schemas/walk';
 import type { Walk } from '@/lib/walk/use-walk';
 import { placeOf } from './progress';
-import { addressOf } from './walk-address';
+import { goTo } from './walk-address';
 import { Choices, WalkButton } from './walk-button';
 
 const PEOPLE = [
@@ -46,7 +46,7 @@ export function ToldScreen({
         ...(left.trim() ? { note: left.trim() } : {}),
       },
     ]);
-    location.hash = addressOf(state.inspection.id, { kind: 'area', areaId: receptacle.areaId });
+    goTo(state.inspection.id, { kind: 'area', areaId: receptacle.areaId });
   }
 
   return (

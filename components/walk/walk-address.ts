@@ -43,3 +43,8 @@ export function addressOf(inspectionId: string, view: WalkView): string {
       return `#${inspectionId}/${view.kind}/${view.receptacleId}`;
   }
 }
+
+/** Shows a view; Back returns from it. */
+export function goTo(inspectionId: string, view: WalkView): void {
+  window.location.hash = addressOf(inspectionId, view);
+}

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useEffect, useSyncExternalStore } from 'react';
 
 const THEMES = ['light', 'dark', 'sun'] as const;
 type Theme = (typeof THEMES)[number];
@@ -10,23 +10,18 @@ const NEXT_LABEL: Record<Theme, string> = {
   sun: 'Sun theme. Change to light',
 };
 const KEY = 'ohmstead-walk-theme';
+const CHANGED = 'ohmstead-walk-theme-changed';
 
 /** Walk keeps its theme apart from the rest of the program. */
 export function WalkTheme() {
-  const [theme, setTheme] = useState<Theme>('light');
-  useEffect(() => {
-    const kept = THEMES.find((known) => known === localStorage.getItem(KEY));
-    const preferred = window.matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light';
-    setTheme(kept ?? preferred);
-  }, []);
+  const theme = useSyncExternalStore(onChange, keptTheme, () => 'light' as const);
   useEffect(() => {
     document.documentElement.dataset.theme = theme;
   }, [theme]);
 
   function change() {
-    const next = THEMES[(THEMES.indexOf(theme) + 1) % THEMES.length] ?? 'light';
-    localStorage.setItem(KEY, next);
-    setTheme(next);
+    localStorage.setItem(KEY, THEMES[(THEMES.indexOf(theme) + 1) % THEMES.length] ?? 'light');
+    window.dispatchEvent(new Event(CHANGED));
   }
   return (
     <button
@@ -38,4 +33,18 @@ export function WalkTheme() {
       <span aria-hidden="true">◐</span>
     </button>
   );
+}
+
+function onChange(notify: () => void) {
+  window.addEventListener(CHANGED, notify);
+  window.addEventListener('storage', notify);
+  return () => {
+    window.removeEventListener(CHANGED, notify);
+    window.removeEventListener('storage', notify);
+  };
+}
+
+function keptTheme(): Theme {
+  const kept = THEMES.find((known) => known === localStorage.getItem(KEY));
+  return kept ?? (window.matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light');
 }
