@@ -3,7 +3,7 @@ import { and, asc, desc, eq } from 'drizzle-orm';
 import { v7 as uuidv7 } from 'uuid';
 import type { StateProfileCode } from '@/lib/findings/vocabulary';
 import type { MemberActor } from './actor';
-import { writeAuditEvent } from './audit';
+import { recordAudit } from './audit';
 import { adoptions, firms } from './schema';
 import type { Address } from './schema/firms';
 import { withActor } from './with-actor';
@@ -50,7 +50,7 @@ export async function saveFirm(actor: MemberActor, settings: FirmSettings): Prom
   if (!actor.roles.includes('owner')) return { kind: 'not-allowed' };
   await withActor(actor, async (tx) => {
     await tx.update(firms).set(settings).where(eq(firms.id, actor.firmId));
-    await writeAuditEvent(tx, actor, { kind: 'firm-changed', detail: {} });
+    await recordAudit(tx, null, 'firm-changed');
   });
   return { kind: 'saved' };
 }
@@ -60,7 +60,7 @@ export async function saveLogo(actor: MemberActor, logoKey: string | null): Prom
   if (!actor.roles.includes('owner')) return { kind: 'not-allowed' };
   await withActor(actor, async (tx) => {
     await tx.update(firms).set({ logoKey }).where(eq(firms.id, actor.firmId));
-    await writeAuditEvent(tx, actor, { kind: 'logo-changed', detail: {} });
+    await recordAudit(tx, null, 'logo-changed');
   });
   return { kind: 'saved' };
 }
@@ -96,7 +96,7 @@ export async function addAdoption(actor: MemberActor, adoption: Adoption): Promi
   if (!actor.roles.includes('owner')) return { kind: 'not-allowed' };
   await withActor(actor, async (tx) => {
     await tx.insert(adoptions).values({ firmId: actor.firmId, id: uuidv7(), ...adoption });
-    await writeAuditEvent(tx, actor, { kind: 'adoption-added', detail: adoption });
+    await recordAudit(tx, null, 'adoption-added', adoption);
   });
   return { kind: 'saved' };
 }
@@ -109,7 +109,7 @@ export async function removeAdoption(actor: MemberActor, adoptionId: string): Pr
       .delete(adoptions)
       .where(and(eq(adoptions.firmId, actor.firmId), eq(adoptions.id, adoptionId)))
       .returning({ place: adoptions.place, edition: adoptions.edition });
-    if (gone) await writeAuditEvent(tx, actor, { kind: 'adoption-removed', detail: gone });
+    if (gone) await recordAudit(tx, null, 'adoption-removed', gone);
   });
   return { kind: 'saved' };
 }

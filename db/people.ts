@@ -2,7 +2,7 @@ import 'server-only';
 import { and, eq, sql } from 'drizzle-orm';
 import { v7 as uuidv7 } from 'uuid';
 import type { MemberActor } from './actor';
-import { writeAuditEvent } from './audit';
+import { recordAudit } from './audit';
 import { enqueueLinkMail, type LinkToSend } from './links';
 import type { Role } from './roles';
 import { firms, memberships } from './schema';
@@ -59,7 +59,7 @@ export async function inviteMember(
     );
     if (rows[0]?.outcome !== 'invited') return { kind: 'already-member' };
     await enqueueLinkMail(tx, { purpose: 'invitation', email, name, firmName: actor.firmName }, link);
-    await writeAuditEvent(tx, actor, { kind: 'member-invited', detail: { membershipId, roles } });
+    await recordAudit(tx, null, 'member-invited', { membershipId, roles });
     return { kind: 'invited' };
   });
 }
@@ -82,7 +82,7 @@ export async function renewInvitation(
     const [person] = rows;
     if (!person) return { kind: 'not-found' };
     await enqueueLinkMail(tx, { purpose: 'invitation', ...person, firmName: actor.firmName }, link);
-    await writeAuditEvent(tx, actor, { kind: 'invitation-renewed', detail: { membershipId } });
+    await recordAudit(tx, null, 'invitation-renewed', { membershipId });
     return { kind: 'invited' };
   });
 }
@@ -116,7 +116,7 @@ export async function signOutMember(actor: MemberActor, membershipId: string): P
     const [member] = await tx.select({ id: memberships.id }).from(memberships).where(isMember(actor, membershipId));
     if (!member) return { kind: 'not-found' };
     await tx.execute(sql`select end_member_sessions(${membershipId})`);
-    await writeAuditEvent(tx, actor, { kind: 'member-signed-out', detail: { membershipId } });
+    await recordAudit(tx, null, 'member-signed-out', { membershipId });
     return { kind: 'changed' };
   });
 }
@@ -135,7 +135,7 @@ export async function saveOwnProfile(actor: MemberActor, profile: Profile): Prom
   await withActor(actor, async (tx) => {
     await tx.execute(sql`select rename_acting_user(${name})`);
     await tx.update(memberships).set(membership).where(isMember(actor, actor.membershipId));
-    await writeAuditEvent(tx, actor, { kind: 'profile-changed', detail: { membershipId: actor.membershipId } });
+    await recordAudit(tx, null, 'profile-changed', { membershipId: actor.membershipId });
   });
 }
 
@@ -143,7 +143,7 @@ export async function saveOwnProfile(actor: MemberActor, profile: Profile): Prom
 export async function saveOwnSignature(actor: MemberActor, signatureKey: string | null): Promise<void> {
   await withActor(actor, async (tx) => {
     await tx.update(memberships).set({ signatureKey }).where(isMember(actor, actor.membershipId));
-    await writeAuditEvent(tx, actor, { kind: 'signature-changed', detail: { membershipId: actor.membershipId } });
+    await recordAudit(tx, null, 'signature-changed', { membershipId: actor.membershipId });
   });
 }
 
@@ -167,7 +167,7 @@ async function changeMember(
     const staysOwner = after.roles.includes('owner') && after.disabledAt === null;
     if (!staysOwner && !(await hasOtherOwner(tx, actor, membershipId))) return { kind: 'last-owner' };
     await tx.update(memberships).set(change).where(isMember(actor, membershipId));
-    await writeAuditEvent(tx, actor, { kind, detail: { membershipId, roles: after.roles } });
+    await recordAudit(tx, null, kind, { membershipId, roles: after.roles });
     return { kind: 'changed' };
   });
 }

@@ -5,14 +5,14 @@ import sharp from 'sharp';
 const MOST_PIXELS = 25_000_000;
 const FORMATS = ['jpeg', 'png'];
 
-export type MarkOutcome = { kind: 'taken-in'; png: Buffer; sha256: string } | { kind: 'refused'; says: string };
+export type MarkOutcome = { kind: 'taken-in'; png: Buffer; sha256: string } | { kind: 'refused' };
 
 /** A logo or a signature: read by its content, turned upright, drawn anew as PNG, so that nothing hidden in it stays. */
 export async function takeInMark(path: string): Promise<MarkOutcome> {
   try {
     const source = sharp(path, { limitInputPixels: MOST_PIXELS, failOn: 'error' });
     const { format } = await source.metadata();
-    if (!FORMATS.includes(format ?? '')) return { kind: 'refused', says: 'Choose a JPEG or PNG picture.' };
+    if (!FORMATS.includes(format ?? '')) return { kind: 'refused' };
     const png = await source
       .autoOrient()
       .resize(1200, 600, { fit: 'inside', withoutEnlargement: true })
@@ -21,6 +21,6 @@ export async function takeInMark(path: string): Promise<MarkOutcome> {
       .toBuffer();
     return { kind: 'taken-in', png, sha256: createHash('sha256').update(png).digest('hex') };
   } catch {
-    return { kind: 'refused', says: 'This picture is damaged, or over 25 million pixels. Choose another.' };
+    return { kind: 'refused' };
   }
 }

@@ -18,10 +18,6 @@ export async function POST(request: Request): Promise<Response> {
   if (!actor?.roles.includes('owner')) return Response.json({ error: 'Sign in as an owner.' }, { status: 401 });
   const outcome = await receiveMark(request, (sha256) => logoKey(actor.firmId, sha256));
   if (outcome.kind === 'stored') await saveLogo(actor, outcome.key);
-  const page = new URL('/firm', env.APP_URL);
-  page.searchParams.set(
-    ...(outcome.kind === 'stored' ? (['notice', 'logo-saved'] as const) : (['refused', outcome.says] as const)),
-  );
-  page.hash = 'logo';
-  return Response.redirect(page, 303);
+  const notice = outcome.kind === 'stored' ? 'logo-saved' : outcome.because;
+  return Response.redirect(new URL(`/firm?notice=${notice}#logo`, env.APP_URL), 303);
 }

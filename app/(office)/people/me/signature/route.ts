@@ -18,10 +18,6 @@ export async function POST(request: Request): Promise<Response> {
   if (!actor) return Response.json({ error: 'Sign in to go on.' }, { status: 401 });
   const outcome = await receiveMark(request, (sha256) => signatureKey(actor.firmId, actor.membershipId, sha256));
   if (outcome.kind === 'stored') await saveOwnSignature(actor, outcome.key);
-  const page = new URL('/people/me', env.APP_URL);
-  page.searchParams.set(
-    ...(outcome.kind === 'stored' ? (['notice', 'signature-saved'] as const) : (['refused', outcome.says] as const)),
-  );
-  page.hash = 'signature';
-  return Response.redirect(page, 303);
+  const notice = outcome.kind === 'stored' ? 'signature-saved' : outcome.because;
+  return Response.redirect(new URL(`/people/me?notice=${notice}#signature`, env.APP_URL), 303);
 }
