@@ -57,11 +57,12 @@ export async function ensureDebianPackages(wanted) {
 }
 
 async function aptInstall(names) {
-  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive', LC_ALL: 'C.UTF-8' };
+  // A broken-off dpkg leaves the machine's packages half set up.
+  const options = { finish: true, env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive', LC_ALL: 'C.UTF-8' } };
   const install = ['install', '-y', '-q', '--no-install-recommends', '-o', 'Dpkg::Options::=--force-confold', ...names];
-  if ((await run('apt-get', install, { env })).code === 0) return;
-  await run('apt-get', ['update', '-q'], { env });
-  const { code, output } = await run('apt-get', install, { env });
+  if ((await run('apt-get', install, options)).code === 0) return;
+  await run('apt-get', ['update', '-q'], options);
+  const { code, output } = await run('apt-get', install, options);
   if (code !== 0) say(output.trim().split('\n').slice(-8).join('\n'));
 }
 

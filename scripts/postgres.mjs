@@ -21,17 +21,20 @@ const ROLES = { ohmstead_owner: 'ownerPassword', ohmstead_app: 'appPassword', oh
 
 /**
  * Starts, and first makes, a PostgreSQL cluster that belongs to this clone alone: on loopback, with passwords, in
- * `folder` under the project. `durable: false` is for tests, which lose nothing by a power cut.
+ * `folder` under the project. `durable: false` is for tests, which lose nothing by a power cut. `onHome` is told where the
+ * cluster lives before it is touched, `onServer` what to stop before it is started.
  */
-export async function openCluster(root, folder, { durable = true } = {}) {
+export async function openCluster(root, folder, { durable = true, onHome, onServer } = {}) {
   await ensureServer();
   const home = await chooseHome(path.join(root, folder));
   mkdirSync(home, { recursive: true, mode: 0o755 });
+  await onHome?.(home);
   for (const part of ['logs', 'mail']) mkdirSync(path.join(home, part), { recursive: true, mode: 0o700 });
   const secrets = loadSecrets(home);
   const data = path.join(home, 'data');
   if (!existsSync(data)) await step('Making the database cluster', () => makeCluster(home, data, secrets));
   const server = serverFor(data);
+  onServer?.({ data, server });
   const port = runningPort(data) ?? (await step('Starting PostgreSQL', () => startServer(server, home, data, durable)));
   const cluster = { home, data, secrets, port, server };
   await ensureRoles(cluster);
@@ -83,9 +86,8 @@ export async function sql(cluster, statements, database = 'postgres') {
 export async function closeCluster({ data, server }) {
   for (const mode of ['fast', 'immediate']) {
     if (runningPort(data) === null) return;
-    await asServerUser(data, path.join(server.bin, 'pg_ctl'), ['stop', '-D', data, '-m', mode, '-w', '-t', '20'], {
-      silent: true,
-    });
+    const args = ['stop', '-D', data, '-m', mode, '-w', '-t', '20'];
+    await asServerUser(data, path.join(server.bin, 'pg_ctl'), args, { silent: true, finish: true });
   }
 }
 

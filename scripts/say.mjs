@@ -1,6 +1,9 @@
 /** A reason not to go on that the person at the keyboard can act on: printed as it is, without a stack. */
 export class Stop extends Error {}
 
+/** The person stopped the program while it was at work. */
+export class Interrupted extends Error {}
+
 export function say(text) {
   process.stderr.write(`${text}\n`);
 }
@@ -24,6 +27,7 @@ export async function step(name, work) {
 /** What to print of a failure: a Stop's own sentence, anything else with its stack. */
 export function explain(error) {
   if (error instanceof Stop) return error.message;
+  if (error instanceof Interrupted) return 'Stopped.';
   if (error?.code === 'EACCES' || error?.code === 'EPERM') {
     return `No permission to write ${error.path ?? 'a file'}: run as the user who owns this folder, or give this user write access to it.`;
   }
