@@ -9,7 +9,11 @@ export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
  * Runs `work` in one transaction that row security reads the actor from. The settings end with the transaction, so a
  * connection goes back to the pool without a firm. Rolls back and throws what `work` throws.
  */
-export async function withActor<Result>(actor: Actor, work: (tx: Transaction) => Promise<Result>): Promise<Result> {
+export async function withActor<Result>(
+  actor: Actor,
+  work: (tx: Transaction) => Promise<Result>,
+  mode?: TransactionMode,
+): Promise<Result> {
   return database().transaction(async (tx) => {
     const { firmId, userId, membershipId, grantId, name } = settingsOf(actor);
     await tx.execute(sql`select
@@ -17,8 +21,12 @@ export async function withActor<Result>(actor: Actor, work: (tx: Transaction) =>
       set_config('app.user_id', ${userId}, true), set_config('app.membership_id', ${membershipId}, true),
       set_config('app.grant_id', ${grantId}, true), set_config('app.name', ${name}, true)`);
     return work(tx);
-  });
+  }, mode);
 }
+
+type TransactionMode = { isolationLevel: 'repeatable read'; accessMode: 'read only' };
+/** For several queries that must see the same moment. */
+export const ONE_MOMENT: TransactionMode = { isolationLevel: 'repeatable read', accessMode: 'read only' };
 
 type Settings = { firmId: string; userId: string; membershipId: string; grantId: string; name: string };
 const NOBODY: Settings = { firmId: '', userId: '', membershipId: '', grantId: '', name: '' };
