@@ -1,0 +1,51 @@
+import { Image, Page, Text, View } from '@react-pdf/renderer';
+import { dayIn } from '@/lib/messages/dates';
+import { coverFacts } from './report-facts';
+import { bookmark, type ReportPrint } from './report-context';
+import { PageFooter, PageHeader } from './report-page';
+import { ReadingDrawing } from './report-drawing';
+import { styles, SERIF } from './report-styles';
+
+/** Whose report, of which house, by whom, and which version. */
+export function ReportCover({ print }: { print: ReportPrint }) {
+  const { snapshot, messages, logo } = print;
+  const { inspection, firm, sha256 } = { ...snapshot, sha256: print.sha256 };
+  return (
+    <Page size="LETTER" style={styles.page} {...bookmark(inspection.street)}>
+      <PageHeader print={print} />
+      <View style={[styles.row, { alignItems: 'center', marginBottom: 14 }]}>
+        {logo && (
+          <Image src={{ data: logo, format: 'jpg' }} style={{ maxWidth: 110, maxHeight: 44, marginRight: 12 }} />
+        )}
+        <Text style={styles.h2}>{firm.name}</Text>
+      </View>
+      <ReadingDrawing drawing={{ pattern: '5-15R', device: 'receptacle' }} width={190} />
+      <Text style={{ fontFamily: SERIF, fontWeight: 700, fontSize: 29, lineHeight: 1.2, marginTop: 26 }}>
+        {inspection.street}
+      </Text>
+      <Text style={{ fontFamily: SERIF, fontWeight: 700, fontSize: 17, lineHeight: 1.3, marginBottom: 16 }}>
+        {inspection.cityLine}
+      </Text>
+      <Text style={styles.lead}>
+        {messages.cover.lead(dayIn(inspection.timeZone, inspection.walkedAt?.first ?? inspection.scheduledAt))}
+      </Text>
+      <View style={{ borderTopWidth: 0.75, borderTopColor: '#1d1a15', marginTop: 8 }}>
+        {coverFacts(snapshot, messages).map(([term, value]) => (
+          <View key={term} style={styles.fact}>
+            <Text style={styles.term}>{term}</Text>
+            <Text style={styles.grow}>{value}</Text>
+          </View>
+        ))}
+      </View>
+      <Text style={[styles.small, { marginTop: 12 }]}>
+        {messages.cover.hash}: {grouped(sha256)}
+      </Text>
+      <PageFooter print={print} />
+    </Page>
+  );
+}
+
+/** In groups of four, so that a person can compare it and the line can break. */
+export function grouped(sha256: string): string {
+  return sha256.replaceAll(/(.{4})(?=.)/g, '$1 ');
+}

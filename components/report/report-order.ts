@@ -1,0 +1,17 @@
+import type { SnapshotFinding } from '@/lib/schemas/snapshot';
+
+/** What a buyer must hear at once: to leave alone, or to have repaired within days. */
+export function inFirstList({ urgency }: Pick<SnapshotFinding, 'urgency'>): boolean {
+  return urgency === 'U1' || urgency === 'U2';
+}
+
+/** Findings that start a page of their own in the PDF. */
+export function startsPage({ signal }: Pick<SnapshotFinding, 'signal'>): boolean {
+  return signal === 'DANGER' || signal === 'WARNING';
+}
+
+export function leadCounts(findings: Pick<SnapshotFinding, 'urgency'>[]): { now: number; days: number; rest: number } {
+  const now = findings.filter((finding) => finding.urgency === 'U1').length;
+  const days = findings.filter((finding) => finding.urgency === 'U2').length;
+  return { now, days, rest: findings.length - now - days };
+}
