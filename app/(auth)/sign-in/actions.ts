@@ -16,7 +16,26 @@ import { textOf } from '@/lib/schemas/form';
 /** The typed password never comes back; the e-mail does. */
 export type SignInState = { email: string; problems: Problem[]; mailedTo: string | null };
 
+/** Two buttons, one action, so that both work without script. */
 export async function signInAction(_: SignInState, form: FormData): Promise<SignInState> {
+  return form.get('intent') === 'mail-link' ? mailSignInLink(form) : signIn(form);
+}
+
+/** Uses the link from the mail up: only this button does. */
+export async function redeemSignInLinkAction(): Promise<void> {
+  const secret = await keptSecret();
+  const userId = secret ? await redeemSignInLink(hashSecret(secret)) : null;
+  await dropSecret();
+  if (userId === null || !(await startSession(userId))) redirect('/open/expired');
+  redirect('/inspections');
+}
+
+export async function signOutAction(): Promise<void> {
+  await endCurrentSession();
+  redirect('/sign-in?notice=signed-out');
+}
+
+async function signIn(form: FormData): Promise<SignInState> {
   const email = textOf(form, 'email');
   const password = textOf(form, 'password');
   const missing = [
@@ -33,7 +52,7 @@ export async function signInAction(_: SignInState, form: FormData): Promise<Sign
 }
 
 /** Says the same, as fast, whether or not the e-mail has an account: the mail is written after the answer is sent. */
-export async function mailSignInLinkAction(_: SignInState, form: FormData): Promise<SignInState> {
+async function mailSignInLink(form: FormData): Promise<SignInState> {
   const email = textOf(form, 'email');
   const parsed = emailSchema.safeParse(email);
   if (!parsed.success) {
@@ -43,20 +62,6 @@ export async function mailSignInLinkAction(_: SignInState, form: FormData): Prom
   if (wait > 0) return { email, problems: [waitProblem('email', wait)], mailedTo: null };
   mailLinkAfterAnswer(parsed.data, 'sign-in');
   return { email, problems: [], mailedTo: parsed.data };
-}
-
-/** Uses the link from the mail up: only this button does. */
-export async function useSignInLinkAction(): Promise<void> {
-  const secret = await keptSecret();
-  const userId = secret ? await redeemSignInLink(hashSecret(secret)) : null;
-  await dropSecret();
-  if (userId === null || !(await startSession(userId))) redirect('/open/expired');
-  redirect('/inspections');
-}
-
-export async function signOutAction(): Promise<void> {
-  await endCurrentSession();
-  redirect('/sign-in');
 }
 
 const NO_MATCH: Problem = { field: 'email', says: 'The e-mail and the password do not belong together. Check both.' };
