@@ -101,6 +101,15 @@ export type AfciTrial = {
 };
 export type AfciAssessment = { verdict: AfciVerdict; row: string; protects: Protects; says: string };
 
+/** What one edition of the model code asks at a place. `since` is the edition that first asked. */
+export type Asked = {
+  asked: 'yes' | 'no' | 'depends';
+  since?: number;
+  rows: string[];
+  confidence: Confidence;
+  note: string;
+};
+
 // ---- What one inspection recorded -----------------------------------------------------------------------------------
 
 /** The part of WiringEvidence that a person reads at the receptacle; the rest comes from the device and the house. */
@@ -324,3 +333,21 @@ export type ComposedFinding = {
   evidence: string[];
   unproven: string[];
 };
+
+/** The parts of a finding's wording that a template writes, in the order in which they are read. */
+export const WORDING_PARTS = [
+  'title',
+  'observed',
+  'means',
+  'hazardType',
+  'consequence',
+  'avoid',
+  'plain',
+  'doNext',
+  'who',
+  'caution',
+  'unproven',
+] as const;
+export type WordingPart = (typeof WORDING_PARTS)[number];
+/** A firm's own templates, per code of a finding and part. What is not named keeps the original. */
+export type WordingSet = Record<string, Partial<Record<WordingPart, string>>>;

@@ -1,0 +1,202 @@
+import { assessAfci } from './protection/afci';
+import { assessGfci } from './protection/gfci';
+import { bitsOf, receptacleEvidence, standingReadings, type ReceptacleEvidence } from './evidence';
+import type {
+  AfciAssessment,
+  AreaFacts,
+  CircuitFacts,
+  GfciAssessment,
+  GfciTrial,
+  InspectionFacts,
+  LampPattern,
+  PhysicalReadingEvidence,
+  ReadingFacts,
+  ReceptacleFacts,
+  SkipFacts,
+  WiringDiagnosis,
+  WiringEvidence,
+} from './facts';
+import { stillOffPoints, type StillOffPoint } from './still-off';
+import type { PhysicalSign, Protects } from './vocabulary';
+import { diagnoseWiring } from './wiring/diagnose';
+
+export type GfciResult = {
+  reading: Extract<ReadingFacts, { kind: 'gfci' }>;
+  trial: GfciTrial;
+  assessment: GfciAssessment;
+};
+export type AfciResult = { reading: Extract<ReadingFacts, { kind: 'afci' }>; assessment: AfciAssessment };
+export type Ground = 'shown' | 'none' | 'unknown';
+
+/** What is known of the shock protection of one point, its own trial or another device's. */
+export type Protection = { state: Protects | 'none-found' | 'unknown'; readingIds: string[]; by: string };
+
+/** One receptacle with everything that was read there. */
+export type Point = {
+  receptacle: ReceptacleFacts;
+  area: AreaFacts;
+  circuit?: CircuitFacts;
+  /** "Garage, bench left" */
+  place: string;
+  readings: ReadingFacts[];
+  evidence: ReceptacleEvidence;
+  /** One per variant of the evidence. */
+  diagnoses: { evidence: WiringEvidence; diagnosis: WiringDiagnosis }[];
+  ground: Ground;
+  gfci: GfciResult[];
+  afci: AfciResult[];
+  signs: { sign: PhysicalSign; readingId: string; evidence: PhysicalReadingEvidence }[];
+  skip?: SkipFacts;
+  protection: Protection;
+};
+
+export type World = {
+  facts: InspectionFacts;
+  standing: ReadingFacts[];
+  /** In walking order. */
+  points: Point[];
+  byId: Map<string, Point>;
+  /** Trials at a breaker, which have a circuit and no receptacle. */
+  breakerGfci: GfciResult[];
+  breakerAfci: AfciResult[];
+  stillOff: StillOffPoint[];
+};
+
+/** Everything the rules look at, put together once. The order of the facts' rows changes nothing. */
+export function buildWorld(facts: InspectionFacts): World {
+  const standing = standingReadings(facts.readings);
+  const points = facts.receptacles
+    .filter((receptacle) => receptacle.presence === 'present')
+    .flatMap((receptacle) => buildPoint(facts, receptacle, standing))
+    .sort(inWalkingOrder);
+  const byId = new Map(points.map((point) => [point.receptacle.id, point]));
+  const atBreaker = standing.filter((reading) => !reading.receptacleId);
+  const world: World = {
+    facts,
+    standing,
+    points,
+    byId,
+    breakerGfci: atBreaker.flatMap((reading) => (reading.kind === 'gfci' ? gfciResult(reading, undefined) : [])),
+    breakerAfci: atBreaker.flatMap((reading) => (reading.kind === 'afci' ? afciResult(reading) : [])),
+    stillOff: stillOffPoints(facts),
+  };
+  for (const point of points) point.protection = protectionOf(point, world);
+  return world;
+}
+
+function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standing: ReadingFacts[]): Point[] {
+  const area = facts.areas.find((row) => row.id === receptacle.areaId);
+  if (!area) return [];
+  const readings = standing.filter((reading) => reading.receptacleId === receptacle.id);
+  const evidence = receptacleEvidence(facts, receptacle, standing);
+  const lamps = evidence.variants[0]?.lamps;
+  return [
+    {
+      receptacle,
+      area,
+      circuit: facts.circuits.find((row) => row.id === receptacle.circuitId),
+      place: `${area.name}, ${receptacle.label}`,
+      readings,
+      evidence,
+      diagnoses: evidence.variants.map((variant) => ({ evidence: variant, diagnosis: diagnoseWiring(variant) })),
+      ground: groundOf(lamps),
+      gfci: readings.flatMap((reading) => (reading.kind === 'gfci' ? gfciResult(reading, lamps) : [])),
+      afci: readings.flatMap((reading) => (reading.kind === 'afci' ? afciResult(reading) : [])),
+      signs: readings.flatMap((reading) =>
+        reading.kind === 'physical'
+          ? reading.evidence.signs.map((sign) => ({ sign, readingId: reading.id, evidence: reading.evidence }))
+          : [],
+      ),
+      skip: skipOf(facts, receptacle),
+      protection: { state: 'unknown', readingIds: [], by: '' },
+    },
+  ];
+}
+
+function skipOf(facts: InspectionFacts, receptacle: ReceptacleFacts): SkipFacts | undefined {
+  const byId = (a: SkipFacts, b: SkipFacts) => (a.id < b.id ? -1 : 1);
+  const own = facts.skips.filter((skip) => skip.receptacleId === receptacle.id).sort(byId);
+  const ofArea = facts.skips.filter((skip) => !skip.receptacleId && skip.areaId === receptacle.areaId).sort(byId);
+  return own[0] ?? ofArea[0];
+}
+
+function groundOf(lamps: LampPattern | undefined): Ground {
+  if (!lamps) return 'unknown';
+  const bits = bitsOf(lamps);
+  if (bits === '110') return 'shown';
+  return bits === '100' ? 'none' : 'unknown';
+}
+
+/** The trial carries the lamps as they were before it; where they differ from the standing ones, the cautious result counts. */
+function gfciResult(
+  reading: Extract<ReadingFacts, { kind: 'gfci' }>,
+  standingLamps: LampPattern | undefined,
+): GfciResult[] {
+  const { wentDead: _wentDead, upstreamReceptacleId: _upstream, ...trial } = reading.evidence;
+  const lampsTried = [trial.lamps, standingLamps].filter((lamps) => lamps !== undefined);
+  const trials: GfciTrial[] = lampsTried.length > 0 ? lampsTried.map((lamps) => ({ ...trial, lamps })) : [trial];
+  const results = trials.map((tried) => ({ reading, trial: tried, assessment: assessGfci(tried) }));
+  const [cautious] = results.toSorted((a, b) => rank(a.assessment.protects) - rank(b.assessment.protects));
+  return cautious ? [cautious] : [];
+}
+
+function rank(protects: Protects): number {
+  return ['no', 'unproven', 'yes'].indexOf(protects);
+}
+
+function afciResult(reading: Extract<ReadingFacts, { kind: 'afci' }>): AfciResult[] {
+  return [{ reading, assessment: assessAfci(reading.evidence) }];
+}
+
+/** Own trials first; then devices whose button put this point out. The newest trial of a device counts. */
+function protectionOf(point: Point, world: World): Protection {
+  const bits = point.evidence.variants[0]?.lamps && bitsOf(point.evidence.variants[0].lamps);
+  const cannotJudge = bits !== undefined && ['001', '010', '011', '111'].includes(bits);
+  const own = point.gfci.at(-1);
+  const upstream = cannotJudge ? undefined : provenUpstream(point, world);
+  if (own?.assessment.protects === 'yes')
+    return {
+      state: 'yes',
+      readingIds: [own.reading.id],
+      by: own.trial.device === 'receptacle' ? 'its own button' : 'the device that feeds it',
+    };
+  if (upstream) return upstream;
+  if (own && own.assessment.protects === 'no')
+    return { state: 'no', readingIds: [own.reading.id], by: 'its own trial' };
+  if (own && (own.trial.deviceFound === false || (own.assessment.verdict === 'unconfirmed' && !cannotJudge)))
+    return { state: 'none-found', readingIds: [own.reading.id], by: 'no device found' };
+  if (own) return { state: 'unproven', readingIds: [own.reading.id], by: 'its own trial' };
+  return { state: 'unknown', readingIds: [], by: '' };
+}
+
+function provenUpstream(point: Point, world: World): Protection | undefined {
+  const others = world.points.filter((other) => other !== point).flatMap((other) => other.gfci);
+  const proof = [...others, ...world.breakerGfci].find(
+    (result) =>
+      result.assessment.protects === 'yes' &&
+      result.trial.button === 'trips' &&
+      result.reading.evidence.wentDead?.includes(point.receptacle.id),
+  );
+  if (!proof) return undefined;
+  const device = proof.reading.receptacleId ? world.byId.get(proof.reading.receptacleId)?.place : undefined;
+  return {
+    state: 'yes',
+    readingIds: [proof.reading.id],
+    by: device ? `the device at ${device}` : 'the device at the panel',
+  };
+}
+
+/** Area order, then receptacle order; ids decide between equals. */
+export function inWalkingOrder(a: Point, b: Point): number {
+  return (
+    a.area.order - b.area.order ||
+    compareText(a.area.id, b.area.id) ||
+    a.receptacle.order - b.receptacle.order ||
+    compareText(a.receptacle.id, b.receptacle.id)
+  );
+}
+
+export function compareText(a: string, b: string): number {
+  if (a === b) return 0;
+  return a < b ? -1 : 1;
+}

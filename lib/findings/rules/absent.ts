@@ -1,0 +1,172 @@
+import type { Asked } from '../facts';
+import type { Point, World } from '../points';
+import { stateProfile } from '../states/all';
+import type { PlaceKind } from '../vocabulary';
+import { askedHere, CURRENT_PRACTICE_EDITION, houseEdition, placesOf } from './asked-here';
+import type { RawFinding, Rule } from './rule';
+
+type Row = { code: string; noun: string };
+
+/** Which row of the catalogue a place belongs to. A place without an entry is asked for its distance to water. */
+const ROW_OF: Partial<Record<PlaceKind, Row>> = {
+  bathroom: { code: 'G07', noun: 'bathroom receptacles' },
+  'kitchen-counter': { code: 'G08', noun: 'kitchen receptacles' },
+  'kitchen-wall': { code: 'G08', noun: 'kitchen receptacles' },
+  outdoors: { code: 'G09', noun: 'exterior receptacles' },
+  garage: { code: 'G10', noun: 'garage and outbuilding receptacles' },
+  'accessory-building': { code: 'G10', noun: 'garage and outbuilding receptacles' },
+  boathouse: { code: 'G10', noun: 'garage and outbuilding receptacles' },
+  basement: { code: 'G11', noun: 'basement and crawl-space receptacles' },
+  'crawl-space': { code: 'G11', noun: 'basement and crawl-space receptacles' },
+  'laundry-area': { code: 'G13', noun: 'laundry and dishwasher receptacles' },
+  dishwasher: { code: 'G13', noun: 'laundry and dishwasher receptacles' },
+  'pool-area': { code: 'X12', noun: 'pool receptacles' },
+};
+const NEAR_WATER: Row = { code: 'G12', noun: 'receptacles near a sink, tub or shower' };
+
+/** G07–G13, G20, X12 and A02: protection that the place calls for and that was not shown. */
+export const absentRule: Rule = {
+  codes: ['G07', 'G08', 'G09', 'G10', 'G11', 'G12', 'G13', 'G20', 'X12', 'A02'],
+  find: (world) => [...absentGfci(world), ...sumpPumps(world), ...absentAfci(world)],
+};
+
+/** Points where current practice asks for shock protection, with the row that says so. */
+export function pointsAskingGfci(world: World): { point: Point; row: Row; asked: Asked }[] {
+  return world.points.flatMap((point) => {
+    const asked = askedHere(point, CURRENT_PRACTICE_EDITION).gfci;
+    return asked.asked === 'yes' ? [{ point, row: rowOf(point), asked }] : [];
+  });
+}
+
+function rowOf(point: Point): Row {
+  for (const place of placesOf(point)) {
+    const row = ROW_OF[place];
+    if (row) return row;
+  }
+  return NEAR_WATER;
+}
+
+function absentGfci(world: World): RawFinding[] {
+  const asking = pointsAskingGfci(world);
+  return asking
+    .filter(({ point }) => point.protection.state === 'none-found')
+    .map(({ point, row, asked }) => {
+      const sameRow = asking.filter(
+        (other) => other.row.code === row.code && other.point.area.structureId === point.area.structureId,
+      );
+      return absent(world, point, { ...row, asked }, sameRow.length);
+    });
+}
+
+function absent(world: World, point: Point, row: Row & { asked: Asked }, count: number): RawFinding {
+  return {
+    code: row.code,
+    group: point.area.structureId,
+    receptacleIds: [point.receptacle.id],
+    readingIds: [...new Set([...point.protection.readingIds, ...point.evidence.readingIds])],
+    values: {
+      asked_when_built: askedWhenBuilt(world, point, 'gfci'),
+      since: row.asked.since ?? '',
+      state_note: stateProfile(world.facts.inspection.stateProfile).absentProtection.sentence,
+      device_found: point.gfci.at(-1)?.trial.deviceFound === false ? 'no' : 'unknown',
+    },
+    outOf: { count, noun: row.noun },
+    drawing: drawingOf(point),
+    ...sinceHook(row.asked),
+  };
+}
+
+function drawingOf(point: Point): RawFinding['drawing'] {
+  const evidence = point.evidence.variants[0];
+  return {
+    pattern: point.receptacle.pattern,
+    device: point.receptacle.device,
+    ...(evidence?.lamps ? { lamps: evidence.lamps } : {}),
+    ...(evidence?.volts ? { volts: evidence.volts } : {}),
+  };
+}
+
+/** The section stands in the catalogue row; the year comes from the place. */
+function sinceHook(asked: Asked): Pick<RawFinding, 'hook'> {
+  return asked.since === undefined ? {} : { hook: { section: '', since: asked.since, confidence: asked.confidence } };
+}
+
+export function askedWhenBuilt(world: World, point: Point, what: 'gfci' | 'afci'): 'yes' | 'no' | 'unknown' {
+  const edition = houseEdition(world.facts);
+  if (edition === undefined) return 'unknown';
+  const { asked } = askedHere(point, edition)[what];
+  return asked === 'depends' ? 'unknown' : asked;
+}
+
+function sumpPumps(world: World): RawFinding[] {
+  return world.points
+    .filter((point) => point.receptacle.doNotTrip === 'sump-pump' && point.protection.state === 'none-found')
+    .map((point) => ({
+      code: 'G20',
+      group: point.receptacle.id,
+      receptacleIds: [point.receptacle.id],
+      readingIds: point.protection.readingIds,
+      values: { state_note: stateProfile(world.facts.inspection.stateProfile).absentProtection.sentence },
+    }));
+}
+
+/** Points where current practice asks for arc protection, and what is known of it. */
+export function pointsAskingAfci(
+  world: World,
+): { point: Point; state: 'shown' | 'absent' | 'unknown'; asked: Asked }[] {
+  return world.points.flatMap((point) => {
+    const asked = askedHere(point, CURRENT_PRACTICE_EDITION).afci;
+    return asked.asked === 'yes' ? [{ point, state: arcState(point, world), asked }] : [];
+  });
+}
+
+function arcState(point: Point, world: World): 'shown' | 'absent' | 'unknown' {
+  const trials = [...world.points.flatMap((other) => other.afci), ...world.breakerAfci];
+  const tried = trials.some(
+    ({ reading }) =>
+      reading.receptacleId === point.receptacle.id ||
+      reading.evidence.wentDead?.includes(point.receptacle.id) ||
+      (!!reading.circuitId && reading.circuitId === point.receptacle.circuitId),
+  );
+  if (tried || point.receptacle.device === 'afci-receptacle' || point.receptacle.device === 'dual-function-receptacle')
+    return 'shown';
+  switch (point.circuit?.protection) {
+    case 'afci':
+    case 'dual-function':
+      return 'shown';
+    case 'none':
+    case 'gfci':
+      return point.receptacle.fedFromReceptacleId ? 'unknown' : 'absent';
+    default:
+      return 'unknown';
+  }
+}
+
+function absentAfci(world: World): RawFinding[] {
+  const asking = pointsAskingAfci(world);
+  return asking
+    .filter(({ state }) => state === 'absent')
+    .map(({ point, asked }) => ({
+      code: 'A02',
+      group: point.area.structureId,
+      receptacleIds: [point.receptacle.id],
+      readingIds: [],
+      values: {
+        asked_when_built: askedWhenBuilt(world, point, 'afci'),
+        since: asked.since ?? '',
+        state_note: stateProfile(world.facts.inspection.stateProfile).absentProtection.sentence,
+      },
+      outOf: {
+        count: asking.filter((other) => other.point.area.structureId === point.area.structureId).length,
+        noun: 'receptacles in living and sleeping rooms',
+      },
+      evidence: [
+        {
+          receptacleId: point.receptacle.id,
+          instrument: 'Panel',
+          showed: `${point.place}: breaker ${point.circuit?.breaker ?? 'not recorded'} has no arc protection recorded`,
+        },
+      ],
+      ...sinceHook(asked),
+    }));
+}

@@ -1,0 +1,47 @@
+import type { InspectionFacts } from '../facts';
+import type { Point } from '../points';
+import { protectionAsked } from '../protection/asked';
+import { editionInForce } from '../protection/edition-in-force';
+import type { PlaceKind } from '../vocabulary';
+import { nominalVoltsOf } from '../evidence';
+
+/**
+ * Edition that stands for current safety practice. The list of the edition after it was not seen in full
+ * (facts section 13), so nothing is said from it.
+ */
+export const CURRENT_PRACTICE_EDITION = 2023;
+
+/** Edition of the model code when the house was built, where it is known or follows from the year. */
+export function houseEdition(facts: InspectionFacts): number | undefined {
+  const { codeEdition, yearBuilt } = facts.inspection;
+  if (codeEdition !== undefined) return codeEdition;
+  return yearBuilt === undefined ? undefined : editionInForce({ yearBuilt, adoptions: [] }).edition;
+}
+
+/** What an edition asks at this point. Distances in feet; what was not measured is not passed. */
+export function askedHere(point: Point, edition: number): ReturnType<typeof protectionAsked> {
+  const { receptacle, area, circuit } = point;
+  return protectionAsked({
+    place: placesOf(point),
+    edition,
+    volts: nominalVoltsOf(receptacle),
+    ...given('amps', circuit?.amps),
+    ...given('finished', area.finished),
+    ...given('gradeAccess', area.gradeAccess),
+    ...given('heightFt', receptacle.heightFt),
+    ...given('dedicatedAppliance', receptacle.dedicatedAppliance),
+    ...given('sinkFt', receptacle.sinkFt),
+    ...given('sinkKind', receptacle.sinkKind),
+    ...given('tubOrShowerFt', receptacle.tubOrShowerFt),
+    ...given('poolFt', receptacle.poolFt),
+    ...given('measuredTo', receptacle.measuredTo),
+  });
+}
+
+export function placesOf(point: Point): PlaceKind[] {
+  return point.area.alsoPlace ? [point.area.place, point.area.alsoPlace] : [point.area.place];
+}
+
+function given<Key extends string, Value>(key: Key, value: Value | undefined): { [key in Key]?: Value } {
+  return value === undefined ? {} : ({ [key]: value } as { [key in Key]: Value });
+}

@@ -1,0 +1,64 @@
+import type { Point, World } from '../points';
+import { askedHere, CURRENT_PRACTICE_EDITION, houseEdition } from './asked-here';
+import type { RawFinding, Rule } from './rule';
+
+/** T01, T03–T05, T07 and X04: what the device and its circuit are, seen without an instrument. */
+export const deviceTypeRule: Rule = {
+  codes: ['T01', 'T03', 'T04', 'T05', 'T07', 'X04'],
+  find: (world) => [...world.points.flatMap((point) => findAt(point, world)), ...sharedNeutrals(world)],
+};
+
+function findAt(point: Point, world: World): RawFinding[] {
+  const { receptacle } = point;
+  const edition = houseEdition(world.facts);
+  const now = askedHere(point, CURRENT_PRACTICE_EDITION);
+  const built = edition === undefined ? undefined : askedHere(point, edition);
+  const lacks = (mark: 'tamper-resistant' | 'weather-resistant') =>
+    receptacle.marksChecked === true && !receptacle.marks.includes(mark);
+  const outdoors = point.area.place === 'outdoors' || point.area.alsoPlace === 'outdoors';
+  const rows: RawFinding[] = [];
+
+  if (receptacle.pattern === '1-15R') rows.push(row(point, 'T01', { outOf: all(world, point, 'receptacles') }));
+  if (lacks('tamper-resistant') && built?.tamperResistant.asked === 'yes' && receptacle.pattern !== '1-15R')
+    rows.push(row(point, 'T03', { outOf: all(world, point, 'receptacles') }));
+  if (lacks('weather-resistant') && now.weatherResistant.asked === 'yes')
+    rows.push(row(point, 'T04', { outOf: all(world, point, 'receptacles') }));
+  if (receptacle.cover === 'flap' && outdoors && now.inUseCover.asked === 'yes')
+    rows.push(row(point, 'T05', { group: receptacle.id }));
+  if (receptacle.pattern === '5-20R' && point.circuit?.amps === 15)
+    rows.push(row(point, 'T07', { group: receptacle.id, values: { breaker: point.circuit.breaker } }));
+  return rows;
+}
+
+function row(point: Point, code: string, rest: Partial<RawFinding>): RawFinding {
+  return {
+    code,
+    group: point.area.structureId,
+    receptacleIds: [point.receptacle.id],
+    readingIds: code === 'T01' ? point.evidence.readingIds : [],
+    drawing: { pattern: point.receptacle.pattern, device: point.receptacle.device },
+    ...rest,
+  };
+}
+
+function all(world: World, point: Point, noun: string): RawFinding['outOf'] {
+  return {
+    count: world.points.filter((other) => other.area.structureId === point.area.structureId).length,
+    noun,
+  };
+}
+
+function sharedNeutrals(world: World): RawFinding[] {
+  return world.facts.circuits
+    .filter((circuit) => circuit.sharedNeutral === 'yes' && circuit.poles === 1)
+    .map((circuit) => ({
+      code: 'X04',
+      group: circuit.id,
+      circuitId: circuit.id,
+      receptacleIds: world.points
+        .filter((point) => point.receptacle.circuitId === circuit.id)
+        .map((point) => point.receptacle.id),
+      readingIds: [],
+      values: { breaker: circuit.breaker },
+    }));
+}
