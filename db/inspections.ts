@@ -8,8 +8,8 @@ import type { InspectionFilter, InspectionPage, NewInspection } from '@/lib/sche
 import type { WalkAnswer } from '@/lib/schemas/walk';
 import type { Actor, MemberActor } from './actor';
 import { recordAudit } from './audit';
+import { inspects, isTimeZone, isWallTime } from './booking-rules';
 import { listRows, readCursor, writeCursor } from './inspection-list';
-import { lockInspection } from './operations/context';
 import {
   firms,
   inspectionInspectors,
@@ -22,7 +22,7 @@ import {
   visits,
 } from './schema';
 import { holds, inspectionsVisibleTo } from './scope';
-import { searchWords } from './search-words';
+import { searchText } from './search-words';
 import { addressLine, walkState } from './walk-rows';
 import { ONE_MOMENT, withActor, type Transaction } from './with-actor';
 
@@ -80,35 +80,6 @@ function bookingRefusal(actor: MemberActor, input: NewInspection): string | null
   return null;
 }
 
-function isTimeZone(name: string): boolean {
-  try {
-    return new Intl.DateTimeFormat('en-US', { timeZone: name }).format(0) !== '';
-  } catch {
-    return false;
-  }
-}
-
-/** A day and time that the calendar has, such as 2026-02-28T09:30; not 2026-02-30T09:30. */
-function isWallTime(local: string): boolean {
-  const instant = new Date(`${local}:00Z`);
-  return !Number.isNaN(instant.getTime()) && instant.toISOString().startsWith(local);
-}
-
-async function inspects(tx: Transaction, firmId: string, membershipId: string): Promise<boolean> {
-  const [row] = await tx
-    .select({ roles: memberships.roles })
-    .from(memberships)
-    .where(
-      and(
-        eq(memberships.firmId, firmId),
-        eq(memberships.id, membershipId),
-        isNull(memberships.disabledAt),
-        isNull(memberships.invitedAt),
-      ),
-    );
-  return row?.roles.includes('inspector') ?? false;
-}
-
 async function nextNumber(tx: Transaction, firmId: string): Promise<number> {
   const [row] = await tx
     .update(firms)
@@ -128,12 +99,6 @@ function partiesOf(input: NewInspection): NewParty[] {
     people.push({ kind: 'agent', name: agentName || agentEmail, email: agentEmail || null });
   }
   return people;
-}
-
-/** What the list finds an inspection by: number, address, and the names of its parties. */
-export function searchText(number: number, address: NewInspection['address'], people: { name: string }[]): string {
-  const { county = '' } = address;
-  return searchWords([number, addressLine(address), county, ...people.map((party) => party.name)].join(' ')).join(' ');
 }
 
 const PAGE_SIZE = 25;

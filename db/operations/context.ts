@@ -3,7 +3,7 @@ import { and, eq } from 'drizzle-orm';
 import { v7 as uuidv7 } from 'uuid';
 import type { Operation } from '@/lib/schemas/operations';
 import type { FieldConflict } from '@/lib/schemas/sync';
-import type { MemberActor } from '../actor';
+import type { Actor, MemberActor } from '../actor';
 import { conflicts, inspections, memberships, users } from '../schema';
 import { inspectionsVisibleTo } from '../scope';
 import type { Transaction } from '../with-actor';
@@ -45,7 +45,7 @@ export function refuse(reason: string): never {
 /** Locks the inspection for this transaction, or null where the actor may not see it. */
 export async function lockInspection(
   tx: Transaction,
-  actor: MemberActor,
+  actor: Actor,
   inspectionId: string,
 ): Promise<LockedInspection | null> {
   const [row] = await tx

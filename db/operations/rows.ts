@@ -22,6 +22,7 @@ import {
   unseenChanges,
   writeFields,
   type Entity,
+  type TrackedRow,
 } from './tracked';
 
 type Fields = Record<string, unknown>;
@@ -96,13 +97,18 @@ export async function removeRow(context: Context, entity: Entity, id: string, ba
     context.unchanged = true;
     return;
   }
-  await refuseWhileInUse(context, entity, id);
   const [latest] = unseenChanges(context, row, base);
   if (latest !== undefined) {
     const what = { entity, entityId: id, field: 'deleted', theirs: false, yours: true };
     await keepBoth(context, what, row.writers[latest], writerOf(context));
     return;
   }
+  await removeStanding(context, entity, row);
+}
+
+/** The tombstone itself; refuses while something that would be left hanging stands in the row. */
+export async function removeStanding(context: Context, entity: Entity, row: TrackedRow): Promise<void> {
+  await refuseWhileInUse(context, entity, row.id);
   await writeFields(context, entity, row, { deleted: true });
 }
 

@@ -16,6 +16,10 @@ const TABLES = {
 export type Entity = keyof typeof TABLES;
 type Fields = Record<string, unknown>;
 
+export function isEntity(name: string): name is Entity {
+  return name in TABLES;
+}
+
 /** The columns that every tracked table has, and the entity's own fields beside them. */
 export type TrackedRow = {
   id: string;
