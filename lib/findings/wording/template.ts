@@ -1,7 +1,7 @@
 import { Liquid, LiquidError, type FS } from 'liquidjs';
 
-/** Enough for a page of text; a template that wants more is refused. */
-const LIMITS = { parseLimit: 20_000, renderLimit: 200, memoryLimit: 200_000 } as const;
+/** Characters, milliseconds and objects: enough for a page of text; a template that wants more is refused. */
+const LIMITS = { parseLimit: 20_000, renderLimit: 1_000, memoryLimit: 200_000 } as const;
 const REFUSED_TAGS = ['include', 'render', 'layout', 'block'] as const;
 
 export type TemplateProblem = { line: number; column: number; message: string };
@@ -45,6 +45,9 @@ function makeEngine(): Liquid {
   liquid.registerFilter('date', refuseClock);
   for (const name of ['date_to_xmlschema', 'date_to_rfc822', 'date_to_string', 'date_to_long_string'])
     liquid.registerFilter(name, refuseClock);
+  liquid.registerFilter('sample', () => {
+    throw new Error('"sample" picks at random, and a report must say the same for ever.');
+  });
   return liquid;
 }
 
