@@ -5,6 +5,7 @@ import CredentialsProvider from 'next-auth/providers/credentials';
 import { VISITOR } from '@/db/actor';
 import { endSession } from '@/db/auth';
 import { env } from '@/lib/env';
+import { log } from '@/lib/log';
 import { cookieAttributes, SESSION_SECONDS, sessionCookieName } from './cookies';
 import { checkPassword, visitorOf } from './sign-in';
 import { createSession, hashSessionId } from './session';
@@ -13,6 +14,8 @@ import { createSession, hashSessionId } from './session';
 export function authOptions(): NextAuthOptions {
   return {
     secret: env.AUTH_SECRET,
+    useSecureCookies: env.APP_URL.startsWith('https://'),
+    logger: { error: (code) => log.error({ code }, 'next-auth failed'), warn: () => undefined, debug: () => undefined },
     session: { strategy: 'jwt', maxAge: SESSION_SECONDS },
     pages: { signIn: '/sign-in', error: '/sign-in' },
     cookies: { sessionToken: { name: sessionCookieName(), options: cookieAttributes() } },
