@@ -1,18 +1,17 @@
-import { Image, Page, Text, View } from '@react-pdf/renderer';
+import { Image, Text, View } from '@react-pdf/renderer';
 import { dayIn } from '@/lib/messages/dates';
 import { coverFacts } from './report-facts';
-import { bookmark, type ReportPrint } from './report-context';
-import { PageFooter, PageHeader } from './report-page';
+import type { ReportPrint } from './report-context';
+import { ReportPage } from './report-page';
 import { ReadingDrawing } from './report-drawing';
 import { styles, SERIF } from './report-styles';
 
 /** Whose report, of which house, by whom, and which version. */
 export function ReportCover({ print }: { print: ReportPrint }) {
-  const { snapshot, messages, logo } = print;
-  const { inspection, firm, sha256 } = { ...snapshot, sha256: print.sha256 };
+  const { snapshot, messages, logo, sha256 } = print;
+  const { inspection, firm } = snapshot;
   return (
-    <Page size="LETTER" style={styles.page} {...bookmark(inspection.street)}>
-      <PageHeader print={print} />
+    <ReportPage print={print} title={inspection.street}>
       <View style={[styles.row, { alignItems: 'center', marginBottom: 14 }]}>
         {logo && (
           <Image src={{ data: logo, format: 'jpg' }} style={{ maxWidth: 110, maxHeight: 44, marginRight: 12 }} />
@@ -40,8 +39,7 @@ export function ReportCover({ print }: { print: ReportPrint }) {
       <Text style={[styles.small, { marginTop: 12 }]}>
         {messages.cover.hash}: {grouped(sha256)}
       </Text>
-      <PageFooter print={print} />
-    </Page>
+    </ReportPage>
   );
 }
 

@@ -5,6 +5,7 @@ import { bookmark, type ReportPrint } from './report-context';
 import { ReadingDrawing, WiresDrawing } from './report-drawing';
 import { readingWords, wiresWords } from './report-drawing-words';
 import { HazardTag } from './report-hazard';
+import { startsPage } from './report-order';
 import { Anchor } from './report-page';
 import { Limits } from './report-parts';
 import { FigurePhoto, PhotoRows } from './report-photos';
@@ -23,11 +24,11 @@ export function ReportFinding({ print, finding }: { print: ReportPrint; finding:
           style={[styles.row, { alignItems: 'center', marginBottom: 6 }]}
           {...bookmark(headline(finding, text.title))}
         >
-          <HazardTag signal={finding.signal} word={messages.signal[finding.signal]} large />
+          <HazardTag signal={finding.signal} word={messages.signal[finding.signal]} large={startsPage(finding)} />
           <Text style={[styles.doing, styles.grow, { marginLeft: 9 }]}>{messages.urgency[finding.urgency]}</Text>
           <Text style={styles.small}>{messages.finding.heading(finding.number)}</Text>
         </View>
-        <Text style={styles.h1}>{headline(finding, text.title)}</Text>
+        <Text style={startsPage(finding) ? styles.h1 : styles.h1Small}>{headline(finding, text.title)}</Text>
         <Figures print={print} finding={finding} photoId={firstPhoto} />
         <HazardParts print={print} hazard={text.hazard} who={text.who} />
         <Text style={[styles.read, { marginTop: 8 }]}>{text.observed}</Text>

@@ -8,13 +8,13 @@ export function ReportPage({ print, title, children }: { print: ReportPrint; tit
   return (
     <Page size="LETTER" style={styles.page} {...bookmark(title)}>
       <PageHeader print={print} />
-      {children}
       <PageFooter print={print} />
+      {children}
     </Page>
   );
 }
 
-export function PageHeader({ print: { snapshot, messages } }: { print: ReportPrint }) {
+function PageHeader({ print: { snapshot, messages } }: { print: ReportPrint }) {
   const { firm, inspectors } = snapshot;
   const left = [firm.name, firm.address, firm.phone].filter(Boolean).join(' · ');
   const firmLicense = firm.licenseNumber ? [`Firm ${messages.license(firm.licenseNumber)}`] : [];
@@ -23,18 +23,21 @@ export function PageHeader({ print: { snapshot, messages } }: { print: ReportPri
   );
   return (
     <View style={styles.header} fixed>
-      <Text style={{ maxWidth: 300 }}>{left}</Text>
-      <Text style={{ maxWidth: 215, textAlign: 'right' }}>{[...people, ...firmLicense].join(' · ')}</Text>
+      <Text style={{ maxWidth: 310 }}>{left}</Text>
+      <Text style={{ maxWidth: 205, textAlign: 'right' }}>{[...people, ...firmLicense].join(' · ')}</Text>
     </View>
   );
 }
 
-export function PageFooter({ print: { snapshot, messages } }: { print: ReportPrint }) {
+function PageFooter({ print: { snapshot, messages } }: { print: ReportPrint }) {
   const { inspection, number } = snapshot;
   return (
     <View style={styles.footer} fixed>
       <Text>{messages.footer(inspection.number, number, `${inspection.street}, ${inspection.cityLine}`)}</Text>
-      <Text render={({ pageNumber, totalPages }) => messages.pageOf(pageNumber, totalPages)} />
+      <Text
+        style={styles.folio}
+        render={({ pageNumber, totalPages }) => (totalPages ? messages.pageOf(pageNumber, totalPages) : ' ')}
+      />
     </View>
   );
 }
@@ -46,7 +49,7 @@ export function Anchor({ print, id }: { print: ReportPrint; id: string }) {
       id={id}
       style={{ height: 0.1, fontSize: 1 }}
       render={({ pageNumber }) => {
-        if (!print.pages.has(id)) print.pages.set(id, pageNumber);
+        print.pages.set(id, pageNumber);
         return ' ';
       }}
     />

@@ -15,10 +15,14 @@ export function Limits({ children }: { children: ReactNode }) {
 /** A link inside the PDF that prints as the page it goes to. */
 export function PageLink({ print, anchor, label }: { print: ReportPrint; anchor: string; label?: string }) {
   return (
-    <Link src={`#${anchor}`} style={[styles.link, { fontSize: 9, marginRight: label ? 12 : 0 }]}>
-      {label ? `${label}, ` : ''}
-      <Text render={() => print.messages.page(print.pages.get(anchor)) || ' '} />
-    </Link>
+    <Text
+      style={{ fontSize: 9, width: label ? 160 : 52, textAlign: label ? 'left' : 'right' }}
+      render={() => (
+        <Link src={`#${anchor}`} style={styles.link}>
+          {[label, print.messages.page(print.pages.get(anchor))].filter(Boolean).join(', ') || ' '}
+        </Link>
+      )}
+    />
   );
 }
 

@@ -13,16 +13,14 @@ export function FigurePhoto({ print, photoId }: { print: ReportPrint; photoId: s
   );
 }
 
-/** The other photos, two beside each other. */
+/** The other photos, three beside each other. */
 export function PhotoRows({ print, photoIds }: { print: ReportPrint; photoIds: string[] }) {
-  const pairs = Array.from({ length: Math.ceil(photoIds.length / 2) }, (_, row) =>
-    photoIds.slice(row * 2, row * 2 + 2),
-  );
-  return pairs.map((pair) => (
-    <View key={pair[0]} style={[styles.row, { marginTop: 12 }]} wrap={false}>
-      {pair.map((photoId) => (
-        <View key={photoId} style={{ width: 256, paddingRight: 12 }}>
-          <Picture print={print} photoId={photoId} height={180} />
+  const rows = Array.from({ length: Math.ceil(photoIds.length / 3) }, (_, row) => photoIds.slice(row * 3, row * 3 + 3));
+  return rows.map((row) => (
+    <View key={row[0]} style={[styles.row, { marginTop: 12 }]} wrap={false}>
+      {row.map((photoId) => (
+        <View key={photoId} style={{ width: 175, paddingRight: 12 }}>
+          <Picture print={print} photoId={photoId} height={122} />
         </View>
       ))}
     </View>

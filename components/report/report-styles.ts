@@ -38,7 +38,7 @@ export const styles = StyleSheet.create({
   },
   footer: {
     position: 'absolute',
-    bottom: 30,
+    top: 740,
     left: MARGIN,
     right: MARGIN,
     ...row,
@@ -49,7 +49,9 @@ export const styles = StyleSheet.create({
     fontSize: 8,
     color: INK_2,
   },
+  folio: { width: 70, textAlign: 'right' },
   h1: { fontFamily: SERIF, fontWeight: 700, fontSize: 20, lineHeight: 1.25, marginBottom: 8 },
+  h1Small: { fontFamily: SERIF, fontWeight: 700, fontSize: 14, lineHeight: 1.3, marginBottom: 6 },
   h2: { fontFamily: SERIF, fontWeight: 700, fontSize: 12, lineHeight: 1.3 },
   section: { borderBottomWidth: 1.5, borderBottomColor: INK, paddingBottom: 4, marginTop: 20, marginBottom: 2 },
   h3: { fontWeight: 700, fontSize: 9.5, marginBottom: 3 },
