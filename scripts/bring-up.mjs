@@ -1,4 +1,4 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { bundle, buildIfStale, buildPaths } from './build.mjs';
 import { ensureDatabase, openCluster, sql } from './postgres.mjs';
@@ -13,12 +13,24 @@ import { actionsKey } from './settings.mjs';
  */
 export async function bringUp(
   stack,
-  { root, plan, folder, buildDir, ports, given, isEmpty = false, isTest = false, isDev = false },
+  {
+    root,
+    plan,
+    folder,
+    buildDir,
+    ports,
+    given,
+    isEmpty = false,
+    isTest = false,
+    isDev = false,
+    isDatabaseOnly = false,
+  },
 ) {
   const base = await openDatabase(stack, { root, plan, folder, given, isTest });
   const { migrate } = await import('./migrate.mjs');
   await step('Migrating the database', () => migrate(base.DATABASE_OWNER_URL));
   const settings = { ...base, ...(await webAddress(plan, given, ports.web)) };
+  if (isDatabaseOnly) return settings;
   if (isDev) await bundle(root, 'worker.ts', buildPaths(root, buildDir).worker);
   else await buildIfStale(root, buildDir, settings.NEXT_SERVER_ACTIONS_ENCRYPTION_KEY);
   if (plan.isLocal) await startFakes(stack, root, settings, given, ports);
@@ -40,6 +52,8 @@ async function openDatabase(stack, { root, plan, folder, given, isTest }) {
     onServer: (server) => (stack.cluster = server),
   });
   stack.useCluster(cluster);
+  if (isTest)
+    for (const old of ['uploads', 'mail']) rmSync(path.join(stack.home, old), { recursive: true, force: true });
   const isHalfSeeded = readWhole(path.join(stack.home, 'demo.json'))?.state === 'loading';
   const urls = await ensureDatabase(cluster, 'ohmstead', { fresh: isTest || isHalfSeeded });
   const secret = given.AUTH_SECRET || cluster.secrets.authSecret;
