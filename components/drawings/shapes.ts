@@ -45,8 +45,7 @@ export type Role =
   | 'open'
   | 'bridge'
   | 'flag'
-  | 'flag-text'
-  | 'quiet-text';
+  | 'flag-text';
 
 export type Shape =
   | { kind: 'path'; role: Role; d: string; turn?: { degrees: number; x: number; y: number } }
@@ -115,7 +114,6 @@ export const LOOKS: Record<Role, Look> = {
   bridge: { stroke: 'ink', line: 1 },
   flag: { fill: 'inverse', stroke: 'paper', line: 0.6 },
   'flag-text': { fill: 'on-inverse' },
-  'quiet-text': { fill: 'ink' },
 };
 
 /** Two decimals are a hundredth of a millimetre. */

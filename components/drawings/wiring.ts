@@ -139,10 +139,7 @@ function bridgeShapes({ bridge }: Wiring): Shape[] {
   if (!bridge) return [];
   const toGround = bridge.to === 'G';
   const d = toGround ? `M0 31.5H4${ZIGZAG}H20.4` : `M-20.4 31.5H2.6${ZIGZAG}H20.4`;
-  return [
-    { kind: 'path', role: 'bridge', d },
-    { kind: 'text', role: 'quiet-text', x: toGround ? 10 : 8.4, y: 38.4, size: 3.4, words: bridge.word },
-  ];
+  return [{ kind: 'path', role: 'bridge', d }, ...flag(toGround ? 10.6 : 10, toGround ? 25.8 : 37.8, bridge.word)];
 }
 
 function screws(): Shape[] {
