@@ -78,7 +78,7 @@ async function runTests(stack, only, wants) {
   rmSync(path.join(root, 'test-results'), { recursive: true, force: true });
   const settings = only === 'unit' ? cleanVariables() : await comeUp(stack, only);
   if (settings === null) return;
-  const env = { ...settings, NODE_ENV: 'test', FORCE_COLOR: '0' };
+  const env = { ...settings, NODE_ENV: 'test', NO_COLOR: '1' };
   if (wants('unit', 'db', 'routes')) await runVitest(env, only);
   if (wants('journeys')) await runJourneys(env);
 }
