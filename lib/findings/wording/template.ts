@@ -94,7 +94,9 @@ function firstUnknownName(text: string, values: Readonly<Record<string, unknown>
 }
 
 function problemOf(error: unknown): TemplateProblem {
-  if (!LiquidError.is(error)) throw error;
+  // Limits on size are plain errors without a place in the text.
+  if (!LiquidError.is(error))
+    return { line: 1, column: 1, message: error instanceof Error ? error.message : String(error) };
   const [line, column] = error.token.getPosition();
   const [message] = error.message.split(/, (?:line|file):/);
   return { line: line ?? 1, column: column ?? 1, message: message ?? 'This template cannot be read.' };
