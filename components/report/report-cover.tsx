@@ -3,7 +3,7 @@ import { dayIn } from '@/lib/messages/dates';
 import { coverFacts } from './report-facts';
 import type { ReportPrint } from './report-context';
 import { ReportPage } from './report-page';
-import { ReadingDrawing } from './report-drawing';
+import { EmptyRing } from './report-drawing';
 import { styles, SERIF } from './report-styles';
 
 /** Whose report, of which house, by whom, and which version. */
@@ -18,7 +18,7 @@ export function ReportCover({ print }: { print: ReportPrint }) {
         )}
         <Text style={styles.h2}>{firm.name}</Text>
       </View>
-      <ReadingDrawing drawing={{ pattern: '5-15R', device: 'receptacle' }} width={190} />
+      <EmptyRing width={190} />
       <Text style={{ fontFamily: SERIF, fontWeight: 700, fontSize: 29, lineHeight: 1.2, marginTop: 26 }}>
         {inspection.street}
       </Text>

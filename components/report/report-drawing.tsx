@@ -1,14 +1,27 @@
-import { View } from '@react-pdf/renderer';
+import { drawingOf } from '@/components/drawings/receptacle-drawing';
 import type { SnapshotFinding } from '@/lib/schemas/snapshot';
+import { PdfReceptacle } from './pdf-receptacle';
 
 type Drawing = NonNullable<SnapshotFinding['drawing']>;
 
-/** What was read: three lamps or volts on a ring around the face. */
+/** What was read: three lamps or volts on a ring around the face; the device itself where neither was read. */
 export function ReadingDrawing({ drawing, width }: { drawing: Drawing; width: number }) {
-  return <View style={{ width, height: width }} id={drawing.pattern} />;
+  return <PdfReceptacle drawing={readingOf(drawing)} width={width} />;
 }
 
 /** What that most often means: the conductors behind the face. */
 export function WiresDrawing({ drawing, width }: { drawing: Drawing; width: number }) {
-  return <View style={{ width, height: width }} id={drawing.pattern} />;
+  if (!drawing.condition) return null;
+  const { pattern, condition } = drawing;
+  return <PdfReceptacle drawing={drawingOf({ view: 'wiring', pattern, condition })} width={width} />;
+}
+
+/** A ring without a reading, for the cover. */
+export function EmptyRing({ width }: { width: number }) {
+  return <PdfReceptacle drawing={drawingOf({ view: 'reading', pattern: '5-15R' })} width={width} />;
+}
+
+function readingOf({ pattern, device, lamps, volts }: Drawing) {
+  if (!lamps && !volts) return drawingOf({ view: 'face', pattern, device });
+  return drawingOf({ view: 'reading', pattern, ...(lamps ? { lamps } : { volts }) });
 }

@@ -14,8 +14,8 @@ export const FONT_FAMILIES = [
   { family: 'Merriweather', name: 'merriweather', script: 'latin' },
   { family: 'Merriweather ext', name: 'merriweather', script: 'latin-ext' },
   { family: 'Merriweather vietnamese', name: 'merriweather', script: 'vietnamese' },
-  { family: 'Atkinson', name: 'atkinson-hyperlegible', script: 'latin' },
-  { family: 'Atkinson ext', name: 'atkinson-hyperlegible', script: 'latin-ext' },
+  { family: 'Atkinson Hyperlegible', name: 'atkinson-hyperlegible', script: 'latin' },
+  { family: 'Atkinson Hyperlegible ext', name: 'atkinson-hyperlegible', script: 'latin-ext' },
 ] as const;
 
 let isRegistered = false;

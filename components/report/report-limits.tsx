@@ -4,7 +4,7 @@ import { wordsIn, type ReportPrint } from './report-context';
 import { grouped } from './report-cover';
 import { Anchor, ReportPage } from './report-page';
 import { Limits, Section } from './report-parts';
-import { styles } from './report-styles';
+import { SERIF, styles } from './report-styles';
 
 /** What the readings leave open. */
 export function ReportGaps({ print }: { print: ReportPrint }) {
@@ -116,7 +116,7 @@ function Signature({ print }: { print: ReportPrint }) {
               style={{ height: 40, objectFit: 'contain', objectPosition: '0 0' }}
             />
           ) : (
-            <Text style={{ fontFamily: 'Merriweather', fontStyle: 'italic', fontSize: 17 }}>{signature.name}</Text>
+            <Text style={{ fontFamily: SERIF, fontStyle: 'italic', fontSize: 17 }}>{signature.name}</Text>
           )}
           <Text style={styles.quiet}>
             {messages.signature.signed(

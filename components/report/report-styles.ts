@@ -3,8 +3,20 @@ import { StyleSheet } from '@react-pdf/renderer';
 /** Points. 0.6 inches around, on Letter. */
 export const MARGIN = 43.2;
 export const LETTER_WIDTH = 612;
-export const SERIF = ['Merriweather', 'Merriweather ext', 'Merriweather vietnamese', 'Atkinson', 'Atkinson ext'];
-export const SANS = ['Atkinson', 'Atkinson ext', 'Merriweather vietnamese', 'Merriweather', 'Merriweather ext'];
+export const SERIF = [
+  'Merriweather',
+  'Merriweather ext',
+  'Merriweather vietnamese',
+  'Atkinson Hyperlegible',
+  'Atkinson Hyperlegible ext',
+];
+export const SANS = [
+  'Atkinson Hyperlegible',
+  'Atkinson Hyperlegible ext',
+  'Merriweather vietnamese',
+  'Merriweather',
+  'Merriweather ext',
+];
 
 export const INK = '#1d1a15';
 export const INK_2 = '#5c5548';

@@ -78,7 +78,6 @@ const finding = z.object({
       instrument: z.string(),
       showed: z.string(),
       by: z.string().optional(),
-      place: z.string().optional(),
     }),
   ),
   told: z.array(z.object({ at: instant, whom: z.string(), note: z.string().optional() })),

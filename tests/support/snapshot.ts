@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import sharp from 'sharp';
+import { REPORT_LIMITS } from '@/lib/findings/wording/report-limits';
 import { enReport } from '@/lib/messages/en-report';
 import { canonicalJson, RENDERER, type ReportSnapshot, type SnapshotFinding } from '@/lib/schemas/snapshot';
 
@@ -133,7 +134,7 @@ function build(stored: { id: string; sha256: string }[]): ReportSnapshot {
       {
         place: 'Bedroom 2, receptacle 8',
         reason: 'blocked',
-        says: { en: enReport.skip.blocked },
+        says: { en: 'Not tested: blocked by furniture or stored goods.' },
         note: 'Behind the wardrobe.',
       },
     ],
@@ -150,7 +151,7 @@ function build(stored: { id: string; sha256: string }[]): ReportSnapshot {
       place: 'Garage, bench left',
       receptacleId: id(40),
     })),
-    limits: { en: enReport.limits.lines },
+    limits: { en: [...REPORT_LIMITS] },
   };
 }
 
