@@ -45,7 +45,7 @@ export async function buildIfStale(root, buildDir, actionsKey) {
 
 /** Bundles a program that runs in plain Node.js. The marker package `server-only` throws there, hence the empty file. */
 export async function bundle(root, entry, outfile) {
-  const { build } = await import('esbuild');
+  const { build, stop } = await import('esbuild');
   await build({
     absWorkingDir: root,
     entryPoints: [entry],
@@ -60,6 +60,7 @@ export async function bundle(root, entry, outfile) {
     alias: { 'server-only': './scripts/empty.ts', '@': root },
     logLevel: 'error',
   });
+  await stop();
 }
 
 function hashSources(root, actionsKey) {
