@@ -50,11 +50,21 @@ function conflicts(point: Point): Gap[] {
     trial?.trial.lamps && bitsOf(trial.trial.lamps) === '100' && trial.trial.tester === 'trips'
       ? ['The plug-in tester tripped the GFCI, so there is a ground path that the lamps missed']
       : [];
-  const all = [...new Set([...fromReadings, ...fromDiagnosis, ...missedGround])];
+  const trialLamps = lampsChanged(point);
+  const all = [...new Set([...fromReadings, ...fromDiagnosis, ...missedGround, ...trialLamps])];
   if (all.length === 0) return [];
   const says = `${all.map(asSentence).join(' ')} Both cannot be right. Read it again and correct the one that is wrong.`;
   const readingIds = [...point.evidence.readingIds, ...(missedGround.length > 0 && trial ? [trial.reading.id] : [])];
   return [gapAt(point, 'conflict', 'readings', says, readingIds)];
+}
+
+/** A trial carries the lamps as they were before it; they have to be those that were read then. */
+function lampsChanged(point: Point): string[] {
+  const trial = point.gfci.at(-1)?.reading;
+  const wiring = point.readings.findLast((reading) => reading.kind === 'wiring' && reading.evidence.lamps);
+  if (!trial?.evidence.lamps || wiring?.kind !== 'wiring' || !wiring.evidence.lamps) return [];
+  if (wiring.order > trial.order || bitsOf(wiring.evidence.lamps) === bitsOf(trial.evidence.lamps)) return [];
+  return ['The lamps noted with the trip test differ from the lamps read before it'];
 }
 
 function notTested(point: Point): Gap[] {
@@ -90,7 +100,13 @@ function wiringUnproven(point: Point, findings: readonly Finding[]): Gap[] {
 
   const suspected = leading.filter((condition) => condition !== 'correct');
   const readsCorrect = evidence.lamps !== undefined && bitsOf(evidence.lamps) === '110';
-  if (readsCorrect && suspected.length > 0)
+  const toldByFinding = findings.some(
+    (finding) =>
+      /^W(?!07:house)/.test(finding.id) &&
+      'receptacleIds' in finding.subject &&
+      finding.subject.receptacleIds.includes(point.receptacle.id),
+  );
+  if (readsCorrect && suspected.length > 0 && !toldByFinding)
     gaps.push(
       gapAt(
         point,
@@ -251,7 +267,7 @@ function breakerGaps(world: World): Gap[] {
 function notTold(world: World, findings: readonly Finding[]): Gap[] {
   const told = world.facts.notices.filter((notice) => notice.kind === 'danger-told');
   return findings
-    .filter((finding) => finding.signal === 'DANGER' || finding.urgency === 'U1')
+    .filter((finding) => finding.signal === 'DANGER' || (finding.urgency === 'U1' && finding.signal !== 'NOTICE'))
     .flatMap((finding) => {
       const ids = 'receptacleIds' in finding.subject ? finding.subject.receptacleIds : [];
       const circuitId = finding.subject.kind === 'circuit' ? finding.subject.circuitId : undefined;

@@ -92,9 +92,13 @@ function mergeGroup(id: string, members: RawFinding[], world: World): Finding {
   const points = world.points.filter((point) => receptacleIds.includes(point.receptacle.id));
   const readings = world.standing.filter((row) => members.some((raw) => raw.readingIds.includes(row.id)));
   const readingIds = readings.sort(byOrder).map((row) => row.id);
+  const urgency = gravest(
+    URGENCIES,
+    members.map((raw) => raw.urgency ?? entry.urgency),
+  );
   const unproven = [...new Set(members.flatMap((raw) => raw.unproven ?? []))];
-  const place = placeWords(first, points, world);
-  const hook = hookOf(first, entry.hook);
+  const place = placeWords(first, members, points, world);
+  const hook = hookOf(first, members, entry.hook);
   return {
     id,
     code: first.code,
@@ -102,10 +106,7 @@ function mergeGroup(id: string, members: RawFinding[], world: World): Finding {
       SIGNALS,
       members.map((raw) => raw.signal ?? entry.signal),
     ),
-    urgency: gravest(
-      URGENCIES,
-      members.map((raw) => raw.urgency ?? entry.urgency),
-    ),
+    urgency,
     who: first.who ?? entry.who,
     subject: subjectOf(first, points),
     place,
@@ -121,13 +122,14 @@ function mergeGroup(id: string, members: RawFinding[], world: World): Finding {
       out_of: first.outOf?.count ?? points.length,
       noun: first.outOf?.noun ?? (points.length === 1 ? 'receptacle' : 'receptacles'),
       section: hook?.section ?? '',
-      since: hook?.since ?? '',
-      breaker: breakerOf(first, points, world),
+      since: sinceWords(members, hook),
+      asked_when_built: agreed(members, 'asked_when_built'),
+      breaker: breakersOf(members, points, world).join(', '),
     },
     evidence: [
       ...evidenceLines(readingIds, world),
-      ...members.flatMap((raw) => raw.evidence ?? []),
-      ...toldLines(first, points, world),
+      ...seenOnce(members.flatMap((raw) => raw.evidence ?? [])),
+      ...(urgency === 'U1' ? toldLines(first, points, world) : []),
     ],
     unproven: unproven.length > 0 ? unproven : [NOT_OPENED],
     ...(first.drawing ? { drawing: first.drawing } : {}),
@@ -142,21 +144,29 @@ function gravest<Value>(order: readonly Value[], values: Value[]): Value {
   return found;
 }
 
-function hookOf(raw: RawFinding, row: Finding['hook']): Finding['hook'] {
+function hookOf(raw: RawFinding, members: RawFinding[], row: Finding['hook']): Finding['hook'] {
   if (!row) return undefined;
-  return raw.hook ? { ...row, ...raw.hook, section: row.section } : row;
+  const years = members.flatMap((member) => member.hook?.since ?? []);
+  return raw.hook ? { ...row, ...raw.hook, section: row.section, since: Math.min(...years) } : row;
 }
 
 function subjectOf(raw: RawFinding, points: Point[]): FindingSubject {
   const receptacleIds = points.map((point) => point.receptacle.id);
   if (raw.wholeHouse) return { kind: 'inspection' };
-  if (raw.circuitId) return { kind: 'circuit', circuitId: raw.circuitId, receptacleIds };
+  if (raw.byBreaker && receptacleIds.length === 0) return { kind: 'panel', panelId: raw.group };
+  if (raw.circuitId && !raw.byBreaker) return { kind: 'circuit', circuitId: raw.circuitId, receptacleIds };
   return { kind: 'receptacles', receptacleIds };
 }
 
-function placeWords(raw: RawFinding, points: Point[], world: World): string {
+function breakerPlace(members: RawFinding[], world: World): string {
+  const breakers = breakersOf(members, [], world);
+  return `${breakers.length === 1 ? 'Breaker' : 'Breakers'} ${joinWords(breakers, 'and')}`;
+}
+
+function placeWords(raw: RawFinding, members: RawFinding[], points: Point[], world: World): string {
   const circuit = world.facts.circuits.find((row) => row.id === raw.circuitId);
   if (raw.wholeHouse) return 'Whole house';
+  if (raw.byBreaker) return breakerPlace(members, world);
   if (circuit && raw.group === circuit.id) return `Breaker ${circuit.breaker}`;
   const [only] = points;
   if (points.length === 1 && only) return only.place;
@@ -176,10 +186,23 @@ function houseValues(world: World): Finding['values'] {
   return { wiring: wiringMethod, year_built: yearBuilt ?? '' };
 }
 
-function breakerOf(raw: RawFinding, points: Point[], world: World): string {
-  const own = world.facts.circuits.find((row) => row.id === raw.circuitId)?.breaker;
-  const breakers = [...new Set(points.flatMap((point) => point.circuit?.breaker ?? []))];
-  return own ?? breakers.join(', ');
+function breakersOf(members: RawFinding[], points: Point[], world: World): string[] {
+  const named = new Set(members.flatMap((raw) => raw.circuitId ?? []));
+  const own = world.facts.circuits.filter((row) => named.has(row.id)).map((row) => row.breaker);
+  const breakers = own.length > 0 ? own : points.flatMap((point) => point.circuit?.breaker ?? []);
+  return [...new Set(breakers)].sort((a, b) => Number.parseInt(a, 10) - Number.parseInt(b, 10) || compareText(a, b));
+}
+
+/** Places of one finding can have been asked for in different editions. */
+function sinceWords(members: RawFinding[], hook: Finding['hook']): string | number {
+  const years = [...new Set(members.flatMap((raw) => raw.hook?.since ?? []))].sort((a, b) => a - b);
+  if (years.length > 1) return joinWords(years.map(String), 'or');
+  return hook?.since ?? '';
+}
+
+function agreed(members: RawFinding[], name: string): string {
+  const [value, ...others] = new Set(members.map((raw) => String(raw.values?.[name] ?? '')));
+  return others.length > 0 ? 'mixed' : (value ?? '');
 }
 
 function photosOf(raw: RawFinding, points: Point[], world: World): string[] {
@@ -190,6 +213,10 @@ function photosOf(raw: RawFinding, points: Point[], world: World): string[] {
     )
     .sort(byOrder)
     .map((photo) => photo.id);
+}
+
+function seenOnce(lines: EvidenceLine[]): EvidenceLine[] {
+  return [...new Map(lines.map((line) => [`${line.instrument}: ${line.showed}`, line])).values()];
 }
 
 function toldLines(raw: RawFinding, points: Point[], world: World): EvidenceLine[] {

@@ -99,7 +99,7 @@ function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standin
       readings,
       evidence,
       diagnoses: evidence.variants.map((variant) => ({ evidence: variant, diagnosis: diagnoseWiring(variant) })),
-      ground: groundOf(lamps),
+      ground: groundOf(lamps ?? trialLamps(readings)),
       gfci: readings.flatMap((reading) => (reading.kind === 'gfci' ? gfciResult(reading, lamps) : [])),
       afci: readings.flatMap((reading) => (reading.kind === 'afci' ? afciResult(reading) : [])),
       signs: readings.flatMap((reading) =>
@@ -120,6 +120,10 @@ function skipOf(facts: InspectionFacts, receptacle: ReceptacleFacts): SkipFacts 
   return own[0] ?? ofArea[0];
 }
 
+function trialLamps(readings: ReadingFacts[]): LampPattern | undefined {
+  return readings.flatMap((reading) => (reading.kind === 'gfci' ? (reading.evidence.lamps ?? []) : [])).at(-1);
+}
+
 function groundOf(lamps: LampPattern | undefined): Ground {
   if (!lamps) return 'unknown';
   const bits = bitsOf(lamps);
@@ -133,7 +137,9 @@ function gfciResult(
   standingLamps: LampPattern | undefined,
 ): GfciResult[] {
   const { wentDead: _wentDead, upstreamReceptacleId: _upstream, ...trial } = reading.evidence;
-  const lampsTried = [trial.lamps, standingLamps].filter((lamps) => lamps !== undefined);
+  // Lamps off now only say that the point is dead now.
+  const now = standingLamps && trial.lamps && bitsOf(standingLamps) === '000' ? undefined : standingLamps;
+  const lampsTried = [trial.lamps, now].filter((lamps) => lamps !== undefined);
   const trials: GfciTrial[] = lampsTried.length > 0 ? lampsTried.map((lamps) => ({ ...trial, lamps })) : [trial];
   const results = trials.map((tried) => ({ reading, trial: tried, assessment: assessGfci(tried) }));
   const [cautious] = results.toSorted((a, b) => rank(a.assessment.protects) - rank(b.assessment.protects));
@@ -154,7 +160,7 @@ function protectionOf(point: Point, world: World): Protection {
   const cannotJudge = bits !== undefined && ['001', '010', '011', '111'].includes(bits);
   const own = point.gfci.at(-1);
   const upstream = cannotJudge ? undefined : provenUpstream(point, world);
-  if (own?.assessment.protects === 'yes')
+  if (own?.assessment.protects === 'yes' && !cannotJudge)
     return {
       state: 'yes',
       readingIds: [own.reading.id],

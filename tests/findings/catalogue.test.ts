@@ -6,7 +6,8 @@ import { REPORT_LIMITS } from '@/lib/findings/wording/report-limits';
 import { findTemplateProblem, renderTemplate } from '@/lib/findings/wording/template';
 import { EMPTY_VALUES, SAMPLE_VALUES, TEMPLATE_VARIABLES } from '@/lib/findings/wording/variables';
 import { RULES } from '@/lib/findings/rules/all';
-import { WORDING_PARTS, type TemplateValues } from '@/lib/findings/facts';
+import type { TemplateValues } from '@/lib/findings/facts';
+import { WORDING_PARTS } from '@/lib/findings/wording/wording-set';
 
 const HAZARD_PARTS = ['hazardType', 'consequence', 'avoid', 'plain'] as const;
 /** Values that turn every branch of a template one way or another. */

@@ -7,21 +7,20 @@ import type { RawFinding, Rule } from './rule';
 
 type Row = { code: string; noun: string };
 
-/** Which row of the catalogue a place belongs to. A place without an entry is asked for its distance to water. */
-const ROW_OF: Partial<Record<PlaceKind, Row>> = {
-  bathroom: { code: 'G07', noun: 'bathroom receptacles' },
-  'kitchen-counter': { code: 'G08', noun: 'kitchen receptacles' },
-  'kitchen-wall': { code: 'G08', noun: 'kitchen receptacles' },
-  outdoors: { code: 'G09', noun: 'exterior receptacles' },
-  garage: { code: 'G10', noun: 'garage and outbuilding receptacles' },
-  'accessory-building': { code: 'G10', noun: 'garage and outbuilding receptacles' },
-  boathouse: { code: 'G10', noun: 'garage and outbuilding receptacles' },
-  basement: { code: 'G11', noun: 'basement and crawl-space receptacles' },
-  'crawl-space': { code: 'G11', noun: 'basement and crawl-space receptacles' },
-  'laundry-area': { code: 'G13', noun: 'laundry and dishwasher receptacles' },
-  dishwasher: { code: 'G13', noun: 'laundry and dishwasher receptacles' },
-  'pool-area': { code: 'X12', noun: 'pool receptacles' },
-};
+/** Which row of the catalogue a place belongs to, gravest first. Elsewhere the distance to water asks. */
+const ROWS: readonly (Row & { places: readonly PlaceKind[] })[] = [
+  { code: 'X12', noun: 'pool receptacles', places: ['pool-area'] },
+  { code: 'G07', noun: 'bathroom receptacles', places: ['bathroom'] },
+  { code: 'G08', noun: 'kitchen receptacles', places: ['kitchen-counter', 'kitchen-wall'] },
+  { code: 'G09', noun: 'exterior receptacles', places: ['outdoors'] },
+  {
+    code: 'G10',
+    noun: 'garage and outbuilding receptacles',
+    places: ['garage', 'accessory-building', 'boathouse'],
+  },
+  { code: 'G11', noun: 'basement and crawl-space receptacles', places: ['basement', 'crawl-space'] },
+  { code: 'G13', noun: 'laundry and dishwasher receptacles', places: ['laundry-area', 'dishwasher'] },
+];
 const NEAR_WATER: Row = { code: 'G12', noun: 'receptacles near a sink, tub or shower' };
 
 /** G07–G13, G20, X12 and A02: protection that the place calls for and that was not shown. */
@@ -39,11 +38,8 @@ export function pointsAskingGfci(world: World): { point: Point; row: Row; asked:
 }
 
 function rowOf(point: Point): Row {
-  for (const place of placesOf(point)) {
-    const row = ROW_OF[place];
-    if (row) return row;
-  }
-  return NEAR_WATER;
+  const places = placesOf(point);
+  return ROWS.find((row) => row.places.some((place) => places.includes(place))) ?? NEAR_WATER;
 }
 
 function absentGfci(world: World): RawFinding[] {
@@ -162,9 +158,8 @@ function absentAfci(world: World): RawFinding[] {
       },
       evidence: [
         {
-          receptacleId: point.receptacle.id,
           instrument: 'Panel',
-          showed: `${point.place}: breaker ${point.circuit?.breaker ?? 'not recorded'} has no arc protection recorded`,
+          showed: `breaker ${point.circuit?.breaker ?? 'not recorded'}: no arc protection recorded`,
         },
       ],
       ...sinceHook(asked),

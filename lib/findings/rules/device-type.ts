@@ -18,15 +18,18 @@ function findAt(point: Point, world: World): RawFinding[] {
   const outdoors = point.area.place === 'outdoors' || point.area.alsoPlace === 'outdoors';
   const rows: RawFinding[] = [];
 
-  if (receptacle.pattern === '1-15R') rows.push(row(point, 'T01', { outOf: all(world, point, 'receptacles') }));
+  if (receptacle.pattern === '1-15R')
+    rows.push(row(point, 'T01', { outOf: all(world, point), ...seen('a face with two slots') }));
   if (lacks('tamper-resistant') && built?.tamperResistant.asked === 'yes' && receptacle.pattern !== '1-15R')
-    rows.push(row(point, 'T03', { outOf: all(world, point, 'receptacles') }));
+    rows.push(row(point, 'T03', { outOf: all(world, point), ...seen('marks looked for, none for tamper resistance') }));
   if (lacks('weather-resistant') && now.weatherResistant.asked === 'yes')
-    rows.push(row(point, 'T04', { outOf: all(world, point, 'receptacles') }));
+    rows.push(
+      row(point, 'T04', { outOf: all(world, point), ...seen('marks looked for, none for weather resistance') }),
+    );
   if (receptacle.cover === 'flap' && outdoors && now.inUseCover.asked === 'yes')
-    rows.push(row(point, 'T05', { group: receptacle.id }));
+    rows.push(row(point, 'T05', { group: receptacle.id, ...seen('a flap cover') }));
   if (receptacle.pattern === '5-20R' && point.circuit?.amps === 15)
-    rows.push(row(point, 'T07', { group: receptacle.id, values: { breaker: point.circuit.breaker } }));
+    rows.push(row(point, 'T07', { group: receptacle.id, ...seen('a 20 ampere face on a 15 ampere breaker') }));
   return rows;
 }
 
@@ -41,10 +44,14 @@ function row(point: Point, code: string, rest: Partial<RawFinding>): RawFinding 
   };
 }
 
-function all(world: World, point: Point, noun: string): RawFinding['outOf'] {
+function seen(showed: string): Pick<RawFinding, 'evidence'> {
+  return { evidence: [{ instrument: 'Seen', showed }] };
+}
+
+function all(world: World, point: Point): RawFinding['outOf'] {
   return {
     count: world.points.filter((other) => other.area.structureId === point.area.structureId).length,
-    noun,
+    noun: 'receptacles',
   };
 }
 
@@ -53,12 +60,13 @@ function sharedNeutrals(world: World): RawFinding[] {
     .filter((circuit) => circuit.sharedNeutral === 'yes' && circuit.poles === 1)
     .map((circuit) => ({
       code: 'X04',
-      group: circuit.id,
+      group: circuit.panelId,
       circuitId: circuit.id,
+      byBreaker: true,
       receptacleIds: world.points
         .filter((point) => point.receptacle.circuitId === circuit.id)
         .map((point) => point.receptacle.id),
       readingIds: [],
-      values: { breaker: circuit.breaker },
+      evidence: [{ instrument: 'Panel', showed: `breaker ${circuit.breaker}: single pole, neutral shared` }],
     }));
 }

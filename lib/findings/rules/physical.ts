@@ -50,7 +50,9 @@ function exposed(point: Point, code: string): Partial<RawFinding> {
 function coverFacts(point: Point): RawFinding[] {
   const { cover } = point.receptacle;
   const told = point.signs.some(({ sign }) => sign === 'cover-missing' || sign === 'live-terminals-exposed');
-  return (cover === 'missing' || cover === 'broken') && !told ? [at(point, 'P09', [], { values: { note: '' } })] : [];
+  return (cover === 'missing' || cover === 'broken') && !told
+    ? [at(point, 'P09', [], { evidence: [{ instrument: 'Seen', showed: `cover ${cover}` }] })]
+    : [];
 }
 
 function metalPlate(point: Point): RawFinding[] {

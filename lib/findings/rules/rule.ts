@@ -12,6 +12,8 @@ export type RawFinding = {
   group: string;
   receptacleIds: string[];
   circuitId?: string;
+  /** Circuits are named in the place instead of rooms. */
+  byBreaker?: boolean;
   wholeHouse?: boolean;
   readingIds: string[];
   /** Where the evidence calls for another word than the catalogue row. */

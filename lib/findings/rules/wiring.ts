@@ -59,7 +59,7 @@ function findAt(point: Point, read: Read, world: World): RawFinding[] {
       code,
       group: groupOf(code, point, evidence),
       receptacleIds: [point.receptacle.id],
-      circuitId: code === 'W20' ? point.receptacle.circuitId : undefined,
+      ...(code === 'W20' && point.circuit ? { circuitId: point.circuit.id, byBreaker: true } : {}),
       wholeHouse: code === 'W19',
       readingIds: point.evidence.readingIds,
       ...gravity,
@@ -72,7 +72,9 @@ function findAt(point: Point, read: Read, world: World): RawFinding[] {
         ...(evidence.volts ? { volts: evidence.volts } : {}),
         ...(leading[0] ? { condition: leading[0] } : {}),
       },
-      ...(code === 'W01' ? { outOf: { count: countThreeSlots(point, world), noun: 'three-slot receptacles' } } : {}),
+      ...(code === 'W01'
+        ? { outOf: { count: countThreeSlots(point, world), noun: 'three-slot receptacles that were read' } }
+        : {}),
     },
   ];
 }
@@ -137,7 +139,8 @@ function suspicionOf(evidence: WiringEvidence): 'seen' | 'load-test' | 'house' {
 function groupOf(code: string, point: Point, evidence: WiringEvidence): string {
   const { id } = point.receptacle;
   if (code === 'W19') return 'service';
-  if (code === 'W20') return point.receptacle.circuitId ?? id;
+  // Two circuits that share a neutral come from one panel; one open neutral is told once.
+  if (code === 'W20') return point.circuit?.panelId ?? id;
   if (code === 'W01' && !anyLive(evidence)) return point.area.structureId;
   if (code === 'W07' && suspicionOf(evidence) === 'house') return `house-${point.area.structureId}`;
   return id;
@@ -162,11 +165,12 @@ function wiringValues(point: Point, { evidence, diagnosis }: Read, code: string)
   };
 }
 
+/** Without those that have no ground behind a proven GFCI: they are told by the rows about the mark. */
 function countThreeSlots(point: Point, world: World): number {
   return world.points.filter(
     (other) =>
       other.area.structureId === point.area.structureId &&
-      other.evidence.variants.length > 0 &&
-      other.evidence.variants[0]?.slots === 3,
+      other.evidence.variants[0]?.slots === 3 &&
+      !(other.ground === 'none' && other.protection.state === 'yes'),
   ).length;
 }

@@ -1,8 +1,9 @@
-import { WORDING_PARTS, type ComposedFinding, type Finding, type WordingPart, type WordingSet } from '../facts';
+import type { ComposedFinding, Finding } from '../facts';
 import type { Locale } from '../vocabulary';
 import { catalogueEntry } from './catalogue/all';
 import { findTemplateProblem, renderTemplate, type TemplateProblem } from './template';
 import { SAMPLE_VALUES } from './variables';
+import { WORDING_PARTS, type WordingPart, type WordingSet } from './wording-set';
 
 /** `wording` overrides single parts per code; what is not named, or does not render, keeps the original. */
 export type ComposeOptions = { locale: Locale; wording?: WordingSet };

@@ -79,8 +79,8 @@ export const TEMPLATE_VARIABLES: readonly TemplateVariable[] = [
   { name: 'upstream', meaning: 'Place of the device upstream, or empty', sample: 'Bathroom 1, right of the basin' },
   { name: 'feeds', meaning: 'What it feeds', sample: 'medical equipment' },
   { name: 'device_found', meaning: 'no where somebody looked for a GFCI and found none', sample: 'no' },
-  { name: 'asked_when_built', meaning: 'yes, no or unknown', sample: 'no' },
-  { name: 'since', meaning: 'Edition of the model code that first asked, or empty', sample: 1975 },
+  { name: 'asked_when_built', meaning: 'yes, no, unknown, or mixed where places differ', sample: 'no' },
+  { name: 'since', meaning: 'Edition of the model code that first asked, or editions, or empty', sample: 1975 },
   { name: 'section', meaning: 'Section that the idea comes from, or empty', sample: '210.8(A)(1)' },
   {
     name: 'state_note',

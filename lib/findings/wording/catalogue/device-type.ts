@@ -12,7 +12,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.4(D)(2)(a)', confidence: 'low' },
     en: {
       title: 'Two-slot receptacles',
-      observed: '{{ count }} of {{ out_of }} {{ noun }} have two slots: {{ where }}.',
+      observed: 'Two slots and no ground slot: {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
       means: 'They have no ground. People then use adapters, which give none either.',
       hazardType: 'Electric shock from a metal case.',
       consequence: 'A three-prong plug on an adapter has no ground.',
@@ -33,7 +33,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.12', since: 2008, confidence: 'high' },
     en: {
       title: 'No tamper-resistant mark',
-      observed: '{{ count }} of {{ out_of }} {{ noun }} show no tamper-resistant mark: {{ where }}.',
+      observed: 'No tamper-resistant mark was found at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
       means: 'Shutters in the slots keep small fingers and things out.',
       hazardType: 'Injury to a child.',
       consequence: 'A child can push a thing into a slot and be burned.',
@@ -54,7 +54,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.9', since: 2008, confidence: 'high' },
     en: {
       title: 'No weather-resistant mark',
-      observed: '{{ count }} of {{ out_of }} {{ noun }} show no weather-resistant mark: {{ where }}.',
+      observed: 'No weather-resistant mark was found at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
       means: 'Parts that are not made for the weather rust and fail early.',
       hazardType: 'Early failure outdoors.',
       consequence: 'Rust can spoil the contacts.',
@@ -116,8 +116,8 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     evidenceNeeded: ['photo of the panel'],
     hook: { section: '210.4(B)', since: 2008, confidence: 'medium' },
     en: {
-      title: 'Two circuits share a neutral on separate breakers',
-      observed: 'Breaker {{ breaker }} shares its neutral with another and has a handle of its own.',
+      title: 'Circuits share a neutral on separate breakers',
+      observed: '{{ place }}: a neutral is shared with another circuit, and no common trip was recorded.',
       means: 'With one breaker off, the shared neutral can still carry current from the other.',
       hazardType: 'Electric shock to whoever works on the circuit.',
       consequence: 'A wire that is believed off can shock.',

@@ -1,5 +1,5 @@
-import type { WordingPart } from '../../facts';
 import type { Confidence, Fixer, Signal, Urgency } from '../../vocabulary';
+import type { WordingPart } from '../wording-set';
 
 /**
  * One row of the catalogue. The templates are Liquid; the names they may use are in ../variables.ts.

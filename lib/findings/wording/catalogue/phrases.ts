@@ -17,4 +17,4 @@ export const MEANS =
 
 /** Edition years, for protection that was not shown. */
 export const SINCE =
-  "{% if since != '' %} The national model code has asked for it at such places since its {{ since }} edition.{% endif %}{% if asked_when_built == 'no' %} When this house was built it was not yet asked for.{% endif %}{% if state_note != '' %} {{ state_note }}{% endif %}";
+  "{% if since != '' %} The national model code first asked for it at such places in its {{ since }} edition.{% endif %}{% if asked_when_built == 'no' %} When this house was built it was not yet asked for.{% endif %}{% if state_note != '' %} {{ state_note }}{% endif %}";

@@ -12,7 +12,7 @@ export const WIRING_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.4, 250.114', confidence: 'low' },
     en: {
       title: 'Three-slot receptacle shows no ground',
-      observed: `{{ count }} of {{ out_of }} {{ noun }} show no ground: {{ where }}.{% if live_ground %} The live-wire sensor answers at the ground slot or the cover. That may be stray voltage. Treat it as live.{% endif %}`,
+      observed: `No ground shows at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).{% if live_ground %} The live-wire sensor answers at the ground slot or the cover. That may be stray voltage. Treat it as live.{% endif %}`,
       means: `Three slots promise a ground that the tester does not find.{% if wiring == 'two-wire' %} Two-wire cable has no ground wire, so this is common in such houses.{% endif %} Which of the two other wires is the hot one cannot be told without a ground.`,
       hazardType: 'Electric shock from a metal case.',
       consequence: 'After a fault in an appliance, its metal case can stay live. Surge strips do not work here.',
@@ -58,7 +58,7 @@ export const WIRING_ROWS: readonly CatalogueEntry[] = [
     evidenceNeeded: ['lamp pattern', 'loads unplugged and hard-wired loads off', 'live-wire sensor at the ground slot'],
     hook: { section: '250, 300.13', confidence: 'low' },
     en: {
-      title: 'Lamps of a broken neutral, or of hot and ground swapped',
+      title: 'May be a broken neutral, or hot and ground swapped',
       observed: `{{ place }}: only the hot-to-ground and neutral-to-ground lamps are lit, or a meter reads the same.${READ}`,
       means: `The lamps cannot tell these apart. ${MEANS} Something as small as a smoke alarm on the circuit is enough for the first.`,
       hazardType: 'Electric shock. The neutral slot is live, and the ground slot may be.',
