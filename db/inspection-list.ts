@@ -65,8 +65,8 @@ export async function listRows(
       scheduledAt: page.scheduledAt,
       yearBuilt: page.yearBuilt,
       key: by === 'number' ? sql<string>`${page.number}::text` : sql<string>`to_json(${page.scheduledAt})#>>'{}'`,
-      buyer: buyerOf(page.firmId, page.id),
-      inspector: leadOf(page.firmId, page.id),
+      buyer: BUYER,
+      inspector: LEAD,
     })
     .from(page)
     .orderBy(direction(page[by]), direction(page.id));
@@ -116,14 +116,11 @@ function beyond(sort: InspectionSort, { key, id }: ListCursor): SQL {
   return newestFirst ? sql`${row} < (${value}, ${id}::uuid)` : sql`${row} > (${value}, ${id}::uuid)`;
 }
 
-function buyerOf(firmId: unknown, id: unknown) {
-  return sql<string | null>`(select p.name from ${parties} p where p.firm_id = ${firmId} and p.inspection_id = ${id}
-    and p.kind = 'buyer' and p.deleted_at is null order by p.created_at, p.id limit 1)`;
-}
+/** Drizzle writes the columns of a lone table without its name, so these name the page themselves. */
+const BUYER = sql<string | null>`(select p.name from ${parties} p where p.firm_id = page.firm_id
+  and p.inspection_id = page.id and p.kind = 'buyer' and p.deleted_at is null order by p.created_at, p.id limit 1)`;
 
-function leadOf(firmId: unknown, id: unknown) {
-  return sql<string | null>`(select u.name from ${inspectionInspectors} w
-    join ${memberships} m on m.firm_id = w.firm_id and m.id = w.membership_id
-    join ${users} u on u.id = m.user_id
-    where w.firm_id = ${firmId} and w.inspection_id = ${id} order by w.leads desc, w.created_at limit 1)`;
-}
+const LEAD = sql<string | null>`(select u.name from ${inspectionInspectors} w
+  join ${memberships} m on m.firm_id = w.firm_id and m.id = w.membership_id
+  join ${users} u on u.id = m.user_id
+  where w.firm_id = page.firm_id and w.inspection_id = page.id order by w.leads desc, w.created_at limit 1)`;
