@@ -14,15 +14,16 @@ export function Limits({ children }: { children: ReactNode }) {
 
 /** A link inside the PDF that prints as the page it goes to. */
 export function PageLink({ print, anchor, label }: { print: ReportPrint; anchor: string; label?: string }) {
+  const width = label ? 160 : 52;
+  // Before the pages are known a figure stands in: a text that was empty once stays so.
+  const pageOf = () => print.messages.page(print.pages.get(anchor) ?? 0);
   return (
-    <Text
-      style={{ fontSize: 9, width: label ? 160 : 52, textAlign: label ? 'left' : 'right' }}
-      render={() => (
-        <Link src={`#${anchor}`} style={styles.link}>
-          {[label, print.messages.page(print.pages.get(anchor))].filter(Boolean).join(', ') || ' '}
-        </Link>
-      )}
-    />
+    <Link src={`#${anchor}`} style={{ width }}>
+      <Text
+        style={[styles.link, { fontSize: 9, width, textAlign: label ? 'left' : 'right' }]}
+        render={() => (label ? `${label}, ${pageOf()}` : pageOf())}
+      />
+    </Link>
   );
 }
 

@@ -32,7 +32,6 @@ export const styles = StyleSheet.create({
     paddingHorizontal: MARGIN,
     fontFamily: SANS,
     fontSize: 9.5,
-    lineHeight: 1.4,
     color: INK,
   },
   header: {
@@ -71,6 +70,7 @@ export const styles = StyleSheet.create({
   lead: { fontFamily: SERIF, fontSize: 10, lineHeight: 1.6, maxWidth: 430, marginBottom: 8 },
   doing: { fontFamily: SERIF, fontWeight: 700, fontSize: 11, lineHeight: 1.4 },
   row,
+  text: { lineHeight: 1.4 },
   between: { ...row, justifyContent: 'space-between', alignItems: 'center' },
   line: { borderBottomWidth: 0.5, borderBottomColor: HAIRLINE, paddingVertical: 5 },
   bold: { fontWeight: 700 },

@@ -46,7 +46,7 @@ export const enReport = {
     'two-wire': 'Two-wire cable, without a ground wire.',
     unknown: 'Wiring method not known.',
   } satisfies Record<WiringMethod, string>,
-  page: (number: number | undefined) => (number === undefined ? '' : `Page ${number}`),
+  page: (number: number) => `page ${number}`,
   pageOf: (page: number, pages: number) => `${page} of ${pages}`,
   footer: (number: number, version: number, street: string) => `Inspection ${number} · version ${version} · ${street}`,
   first: {
