@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { NextResponse, type NextRequest } from 'next/server';
 import { sessionCookieName } from '@/lib/auth/cookies';
+import { env } from '@/lib/env';
 import { contentPolicy, securityHeaders } from '@/lib/auth/security-headers';
 
 /** Pages that anybody may open. The phone's shell holds no data and must open without signal. */
@@ -21,10 +22,19 @@ export function proxy(request: NextRequest): NextResponse {
   }
 
   const headers = new Headers(request.headers);
+  if (isOwnFormWithoutReferrer(request)) headers.set('origin', new URL(env.APP_URL).origin);
   headers.set('x-nonce', nonce);
   headers.set('x-path', `${pathname}${search}`);
   headers.set('content-security-policy', policy);
   return withHeaders(NextResponse.next({ request: { headers } }), policy, pathname);
+}
+
+/**
+ * A form without script on a page that sends no referrer posts the origin "null", which Next.js refuses. The browser's
+ * own word that the request comes from the same site stands in for it; no other site can make a browser say that.
+ */
+function isOwnFormWithoutReferrer({ headers }: NextRequest): boolean {
+  return headers.get('origin') === 'null' && headers.get('sec-fetch-site') === 'same-origin';
 }
 
 function withHeaders(response: NextResponse, policy: string, pathname: string): NextResponse {

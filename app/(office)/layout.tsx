@@ -22,16 +22,20 @@ export default async function OfficeLayout({ children }: { children: ReactNode }
           Ohmstead
         </Link>
         <OfficeNav isOwner={member.roles.includes('owner')} />
-        <div className="ml-auto flex flex-wrap items-center gap-x-4 text-s text-ink-2">
-          <Link href="/people/me" className="inline-flex min-h-[44px] items-center">
-            {member.name} · {member.firmName}
-          </Link>
-          <form action={signOutAction}>
-            <Button weight="plain" type="submit">
-              Sign out
-            </Button>
-          </form>
-        </div>
+        <Link
+          href="/people/me"
+          className="order-4 ml-auto inline-flex min-h-[44px] max-w-full items-center text-s text-ink-2 sm:order-none"
+        >
+          <span className="truncate">
+            {member.name}
+            <span className="max-sm:sr-only"> · {member.firmName}</span>
+          </span>
+        </Link>
+        <form action={signOutAction} className="max-sm:ml-auto">
+          <Button weight="plain" type="submit" className="text-s">
+            Sign out
+          </Button>
+        </form>
       </header>
       <main id="main" tabIndex={-1} className="mx-auto max-w-[1280px] px-4 pt-6 pb-16 outline-none sm:px-8">
         {children}

@@ -12,7 +12,7 @@ const SCREENS = [
 export function OfficeNav({ isOwner }: { isOwner: boolean }) {
   const pathname = usePathname();
   return (
-    <nav aria-label="Firm" className="order-3 w-full sm:order-none sm:w-auto">
+    <nav aria-label="Firm" className="order-3 sm:order-none">
       <ul className="flex gap-5">
         {SCREENS.filter(({ forOwner }) => isOwner || !forOwner).map(({ href, says }) => (
           <li key={href}>

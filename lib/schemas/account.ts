@@ -5,9 +5,14 @@ import { ROLES } from './roles';
 
 export type Problem = { field: string; says: string };
 
-/** Each problem with the field that it belongs to, for the summary at the top and the line at the field. */
+/** The first problem of each field, for the summary at the top and the line at the field. */
 export function problemsOf(error: z.ZodError): Problem[] {
-  return error.issues.map((issue) => ({ field: issue.path.join('.'), says: issue.message }));
+  const first = new Map<string, Problem>();
+  for (const { path, message } of error.issues) {
+    const field = path.join('.');
+    if (!first.has(field)) first.set(field, { field, says: message });
+  }
+  return [...first.values()];
 }
 
 const personName = requiredText('Enter your full name', 100);

@@ -73,7 +73,7 @@ export function FirmForm({ values: saved }: { values: FirmValues }) {
           name="sharedDrafts"
           value="yes"
           defaultChecked={values.sharedDrafts}
-          className="size-5 shrink-0"
+          className="size-5 shrink-0 accent-ink"
         />
         Inspectors see each other’s drafts
       </label>

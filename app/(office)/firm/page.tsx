@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Image from 'next/image';
 import { listAdoptions, loadFirm } from '@/db/firms';
 import { Button } from '@/components/ui/button';
 import { requireMember } from '@/lib/auth/session';
@@ -77,10 +78,13 @@ function LogoSection({ logoKey }: { logoKey: string | null }) {
       </h2>
       {logoKey ? (
         <>
-          <img
+          <Image
+            width={400}
+            height={200}
+            unoptimized
             src={`/firm/logo?${logoKey.slice(-12)}`}
             alt="The firm’s logo"
-            className="max-h-32 justify-self-start border border-rule bg-white"
+            className="h-auto max-h-32 w-auto justify-self-start border border-rule bg-[#fff]"
           />
           <form action={removeLogoAction}>
             <Button type="submit">Remove the logo</Button>
@@ -99,7 +103,7 @@ function LogoSection({ logoKey }: { logoKey: string | null }) {
           name="picture"
           accept="image/png,image/jpeg"
           required
-          className="min-h-[44px]"
+          className="min-h-[44px] max-w-full file:mr-3 file:min-h-[44px] file:cursor-pointer file:rounded-[2px] file:border file:border-solid file:border-ink file:px-4 file:font-bold"
         />
         <p>
           <Button type="submit">Use this logo</Button>

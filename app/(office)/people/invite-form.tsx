@@ -55,7 +55,7 @@ export function InviteForm() {
               name="roles"
               value={role}
               defaultChecked={state.roles.includes(role)}
-              className="size-5 shrink-0"
+              className="size-5 shrink-0 accent-ink"
             />
             <span>
               {ROLE_NAMES[role]} <span className="text-ink-2">{ROLE_SAYS[role]}</span>

@@ -42,7 +42,7 @@ function ManageMember({ member }: { member: Member }) {
                   name="roles"
                   value={role}
                   defaultChecked={member.roles.includes(role)}
-                  className="size-5"
+                  className="size-5 accent-ink"
                 />
                 {ROLE_NAMES[role]}
               </label>

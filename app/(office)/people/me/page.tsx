@@ -27,54 +27,58 @@ export default async function MePage({ searchParams }: PageProps<'/people/me'>) 
   const says = typeof notice === 'string' ? NOTICES[notice] : undefined;
   const others = firms.filter(({ firmId }) => firmId !== actor.firmId);
   return (
-    <div className="grid max-w-lg gap-12">
-      <section>
-        <h1 className="font-serif font-bold text-2xl">{member.name}</h1>
-        <p className="text-ink-2">{member.email}</p>
-        {says && (
-          <p role="status" className="mt-4 border-y border-ink py-3">
-            {says}
-          </p>
-        )}
-        <ProfileForm
-          values={{
-            name: member.name,
-            licenseNumber: member.licenseNumber ?? '',
-            licenseState: member.licenseState ?? '',
-            licenseExpires: member.licenseExpires ?? '',
-            signatureName: member.signatureName ?? '',
-          }}
-        />
-      </section>
-      <SignatureSection signatureKey={member.signatureKey} />
-      <section aria-labelledby="password-title" className="border-t-2 border-ink pt-4">
-        <h2 id="password-title" className="font-serif font-bold text-l">
-          Change your password
-        </h2>
-        <PasswordForm email={member.email} />
-      </section>
-      <section aria-labelledby="elsewhere" className="grid gap-3 border-t-2 border-ink pt-4">
-        <h2 id="elsewhere" className="font-serif font-bold text-l">
-          Signed in elsewhere
-        </h2>
-        <p>After a phone is lost, or on a computer that was not yours.</p>
-        <form action={signOutEverywhereAction}>
-          <Button type="submit">Sign out everywhere else</Button>
-        </form>
-      </section>
-      {others.length > 0 && (
-        <section aria-labelledby="firms" className="grid gap-3 border-t-2 border-ink pt-4">
-          <h2 id="firms" className="font-serif font-bold text-l">
-            Your other firms
-          </h2>
-          {others.map(({ firmId, firmName }) => (
-            <form key={firmId} action={switchFirmAction}>
-              <input type="hidden" name="firmId" value={firmId} />
-              <Button type="submit">Work in {firmName}</Button>
-            </form>
-          ))}
+    <div className="grid items-start gap-12 lg:grid-cols-[minmax(0,32rem)_minmax(0,32rem)]">
+      <div className="grid gap-12">
+        <section>
+          <h1 className="font-serif font-bold text-2xl">{member.name}</h1>
+          <p className="text-ink-2">{member.email}</p>
+          {says && (
+            <p role="status" className="mt-4 border-y border-ink py-3">
+              {says}
+            </p>
+          )}
+          <ProfileForm
+            values={{
+              name: member.name,
+              licenseNumber: member.licenseNumber ?? '',
+              licenseState: member.licenseState ?? '',
+              licenseExpires: member.licenseExpires ?? '',
+              signatureName: member.signatureName ?? '',
+            }}
+          />
         </section>
-      )}
+        <SignatureSection signatureKey={member.signatureKey} />
+      </div>
+      <div className="grid gap-12">
+        <section aria-labelledby="password-title" className="border-t-2 border-ink pt-4">
+          <h2 id="password-title" className="font-serif font-bold text-l">
+            Change your password
+          </h2>
+          <PasswordForm email={member.email} />
+        </section>
+        <section aria-labelledby="elsewhere" className="grid gap-3 border-t-2 border-ink pt-4">
+          <h2 id="elsewhere" className="font-serif font-bold text-l">
+            Signed in elsewhere
+          </h2>
+          <p>After a phone is lost, or on a computer that was not yours.</p>
+          <form action={signOutEverywhereAction}>
+            <Button type="submit">Sign out everywhere else</Button>
+          </form>
+        </section>
+        {others.length > 0 && (
+          <section aria-labelledby="firms" className="grid gap-3 border-t-2 border-ink pt-4">
+            <h2 id="firms" className="font-serif font-bold text-l">
+              Your other firms
+            </h2>
+            {others.map(({ firmId, firmName }) => (
+              <form key={firmId} action={switchFirmAction}>
+                <input type="hidden" name="firmId" value={firmId} />
+                <Button type="submit">Work in {firmName}</Button>
+              </form>
+            ))}
+          </section>
+        )}
+      </div>
     </div>
   );
 }

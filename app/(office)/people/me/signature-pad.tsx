@@ -1,5 +1,6 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
 import { useRef, useState, type PointerEvent } from 'react';
 import { Button } from '@/components/ui/button';
 
@@ -9,6 +10,7 @@ const HEIGHT = 320;
 /** Draws with finger, pen or mouse. Who cannot draw uploads a picture, or signs with the typed name alone. */
 export function SignaturePad() {
   const canvas = useRef<HTMLCanvasElement>(null);
+  const router = useRouter();
   const [isDrawn, setIsDrawn] = useState(false);
   const [says, setSays] = useState('');
 
@@ -44,7 +46,10 @@ export function SignaturePad() {
     form.set('picture', picture, 'signature.png');
     const response = await fetch('/people/me/signature', { method: 'POST', body: form }).catch(() => null);
     if (!response?.ok) return setSays('Not saved. No connection; the drawing is still here.');
-    window.location.assign('/people/me?notice=signature-saved#signature');
+    clear();
+    setSays('');
+    router.push('/people/me?notice=signature-saved');
+    router.refresh();
   }
 
   return (
@@ -58,7 +63,7 @@ export function SignaturePad() {
         height={HEIGHT}
         role="img"
         aria-labelledby="pad-says"
-        className="aspect-[3] w-full touch-none border border-rule bg-white"
+        className="aspect-[3] w-full touch-none border border-rule bg-[#fff]"
         onPointerDown={draw}
         onPointerMove={draw}
       />

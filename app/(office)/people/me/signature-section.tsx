@@ -1,3 +1,4 @@
+import Image from 'next/image';
 import { Button } from '@/components/ui/button';
 import { removeSignatureAction } from './actions';
 import { SignaturePad } from './signature-pad';
@@ -11,10 +12,13 @@ export function SignatureSection({ signatureKey }: { signatureKey: string | null
       </h2>
       {signatureKey ? (
         <>
-          <img
+          <Image
+            width={400}
+            height={200}
+            unoptimized
             src={`/people/me/signature?${signatureKey.slice(-12)}`}
             alt="Your signature"
-            className="max-h-32 justify-self-start border border-rule bg-white"
+            className="h-auto max-h-32 w-auto justify-self-start border border-rule bg-[#fff]"
           />
           <form action={removeSignatureAction}>
             <Button type="submit">Remove the picture</Button>
@@ -34,7 +38,7 @@ export function SignatureSection({ signatureKey }: { signatureKey: string | null
           name="picture"
           accept="image/png,image/jpeg"
           required
-          className="min-h-[44px]"
+          className="min-h-[44px] max-w-full file:mr-3 file:min-h-[44px] file:cursor-pointer file:rounded-[2px] file:border file:border-solid file:border-ink file:px-4 file:font-bold"
         />
         <p>
           <Button type="submit">Use this picture</Button>

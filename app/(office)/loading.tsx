@@ -1,3 +1,0 @@
-export default function Loading() {
-  return <p role="status">Working…</p>;
-}
