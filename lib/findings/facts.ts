@@ -101,15 +101,6 @@ export type AfciTrial = {
 };
 export type AfciAssessment = { verdict: AfciVerdict; row: string; protects: Protects; says: string };
 
-/** What one edition of the model code asks at a place. `since` is the edition that first asked. */
-export type Asked = {
-  asked: 'yes' | 'no' | 'depends';
-  since?: number;
-  rows: string[];
-  confidence: Confidence;
-  note: string;
-};
-
 // ---- What one inspection recorded -----------------------------------------------------------------------------------
 
 /** The part of WiringEvidence that a person reads at the receptacle; the rest comes from the device and the house. */

@@ -46,10 +46,7 @@ function conflicts(point: Point): Gap[] {
   const fromReadings = point.evidence.conflicts;
   const fromDiagnosis = point.diagnoses.flatMap(({ diagnosis }) => diagnosis.conflict ?? []);
   const trial = point.gfci.at(-1);
-  const missedGround =
-    trial?.trial.lamps && bitsOf(trial.trial.lamps) === '100' && trial.trial.tester === 'trips'
-      ? ['The plug-in tester tripped the GFCI, so there is a ground path that the lamps missed']
-      : [];
+  const missedGround = trial?.assessment.conflict ? [trial.assessment.conflict] : [];
   const trialLamps = lampsChanged(point);
   const all = [...new Set([...fromReadings, ...fromDiagnosis, ...missedGround, ...trialLamps])];
   if (all.length === 0) return [];
@@ -120,7 +117,7 @@ function wiringUnproven(point: Point, findings: readonly Finding[]): Gap[] {
     gaps.push(gapAt(point, 'unproven', 'wiring', `Also as likely: ${conditionList(suspected)}.${check}`, ids));
 
   if (evidence.loadTest && !told('W07')) {
-    const { ground } = assessLoad(point, evidence.loadTest);
+    const ground = assessLoad(point, evidence.loadTest)?.ground;
     if (ground === 'undecided')
       gaps.push(
         gapAt(

@@ -22,6 +22,7 @@ export { findForbiddenWords } from './wording/forbidden-words';
 export { findTemplateProblem, renderTemplate, type TemplateProblem } from './wording/template';
 export { TEMPLATE_VARIABLES, SAMPLE_VALUES, type TemplateVariable } from './wording/variables';
 export { WORDING_PARTS, type WordingPart, type WordingSet } from './wording/wording-set';
+export { URGENCY_SENTENCES, whatToDoFirst } from './wording/urgency-words';
 export { REPORT_LIMITS } from './wording/report-limits';
 export { stateProfile, STATE_RULES } from './states/all';
 export type { StateProfile, ReportDeadline } from './states/profile';

@@ -5,7 +5,6 @@ import type {
   AfciAssessment,
   AreaFacts,
   CircuitFacts,
-  GfciAssessment,
   GfciTrial,
   InspectionFacts,
   LampPattern,
@@ -23,7 +22,7 @@ import { diagnoseWiring } from './wiring/diagnose';
 export type GfciResult = {
   reading: Extract<ReadingFacts, { kind: 'gfci' }>;
   trial: GfciTrial;
-  assessment: GfciAssessment;
+  assessment: ReturnType<typeof assessGfci>;
 };
 export type AfciResult = { reading: Extract<ReadingFacts, { kind: 'afci' }>; assessment: AfciAssessment };
 export type Ground = 'shown' | 'none' | 'unknown';

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { checkTemplate, composeFinding, evaluateInspection, originalTemplate } from '@/lib/findings';
+import { checkTemplate, composeFinding, evaluateInspection, originalTemplate, whatToDoFirst } from '@/lib/findings';
 import type { Finding } from '@/lib/findings/facts';
 import { findForbiddenWords } from '@/lib/findings/wording/forbidden-words';
 import { readingGrade } from '@/lib/findings/wording/reading-grade';
@@ -59,4 +59,15 @@ describe('the wording of a firm', () => {
   test('can return to the original', () => {
     expect(originalTemplate('W01', 'title')).toBe('Three-slot receptacle shows no ground');
   });
+});
+
+test('what to do first is grouped by urgency, most urgent first, and leaves nothing out', () => {
+  const groups = whatToDoFirst(ALL);
+  expect(groups.map((group) => group.sentence)).toEqual([
+    'Stop using it now',
+    'Have it repaired within days',
+    'Plan a repair',
+    'Consider an upgrade',
+  ]);
+  expect(groups.flatMap((group) => group.findings)).toHaveLength(ALL.length);
 });

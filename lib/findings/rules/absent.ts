@@ -1,8 +1,8 @@
-import type { Asked } from '../facts';
 import type { Point, World } from '../points';
+import type { Asked } from '../protection/asked';
 import { stateProfile } from '../states/all';
 import type { PlaceKind } from '../vocabulary';
-import { askedHere, CURRENT_PRACTICE_EDITION, houseEdition, placesOf } from './asked-here';
+import { askedHere, CURRENT_PRACTICE_EDITION, houseEditions, placesOf } from './asked-here';
 import type { RawFinding, Rule } from './rule';
 
 type Row = { code: string; noun: string };
@@ -88,10 +88,9 @@ function sinceHook(asked: Asked): Pick<RawFinding, 'hook'> {
 }
 
 export function askedWhenBuilt(world: World, point: Point, what: 'gfci' | 'afci'): 'yes' | 'no' | 'unknown' {
-  const edition = houseEdition(world.facts);
-  if (edition === undefined) return 'unknown';
-  const { asked } = askedHere(point, edition)[what];
-  return asked === 'depends' ? 'unknown' : asked;
+  const answers = new Set(houseEditions(world.facts).map((edition) => askedHere(point, edition)[what].asked));
+  const [only] = answers;
+  return answers.size === 1 && only !== undefined && only !== 'depends' ? only : 'unknown';
 }
 
 function sumpPumps(world: World): RawFinding[] {

@@ -11,11 +11,11 @@ import { nominalVoltsOf } from '../evidence';
  */
 export const CURRENT_PRACTICE_EDITION = 2023;
 
-/** Edition of the model code when the house was built, where it is known or follows from the year. */
-export function houseEdition(facts: InspectionFacts): number | undefined {
+/** Editions that can have stood when the house was built: one that was recorded, or the oldest and newest possible. */
+export function houseEditions(facts: InspectionFacts): number[] {
   const { codeEdition, yearBuilt } = facts.inspection;
-  if (codeEdition !== undefined) return codeEdition;
-  return yearBuilt === undefined ? undefined : editionInForce({ yearBuilt, adoptions: [] }).edition;
+  if (codeEdition !== undefined) return [codeEdition];
+  return yearBuilt === undefined ? [] : editionInForce({ yearBuilt, adoptions: [] }).range;
 }
 
 /** What an edition asks at this point. Distances in feet; what was not measured is not passed. */

@@ -1,5 +1,5 @@
 import type { Point, World } from '../points';
-import { askedHere, CURRENT_PRACTICE_EDITION, houseEdition } from './asked-here';
+import { askedHere, CURRENT_PRACTICE_EDITION, houseEditions } from './asked-here';
 import type { RawFinding, Rule } from './rule';
 
 /** T01, T03–T05, T07 and X04: what the device and its circuit are, seen without an instrument. */
@@ -10,9 +10,10 @@ export const deviceTypeRule: Rule = {
 
 function findAt(point: Point, world: World): RawFinding[] {
   const { receptacle } = point;
-  const edition = houseEdition(world.facts);
   const now = askedHere(point, CURRENT_PRACTICE_EDITION);
-  const built = edition === undefined ? undefined : askedHere(point, edition);
+  const editions = houseEditions(world.facts);
+  const tamperAsked =
+    editions.length > 0 && editions.every((edition) => askedHere(point, edition).tamperResistant.asked === 'yes');
   const lacks = (mark: 'tamper-resistant' | 'weather-resistant') =>
     receptacle.marksChecked === true && !receptacle.marks.includes(mark);
   const outdoors = point.area.place === 'outdoors' || point.area.alsoPlace === 'outdoors';
@@ -20,7 +21,7 @@ function findAt(point: Point, world: World): RawFinding[] {
 
   if (receptacle.pattern === '1-15R')
     rows.push(row(point, 'T01', { outOf: all(world, point), ...seen('a face with two slots') }));
-  if (lacks('tamper-resistant') && built?.tamperResistant.asked === 'yes' && receptacle.pattern !== '1-15R')
+  if (lacks('tamper-resistant') && tamperAsked && receptacle.pattern !== '1-15R')
     rows.push(row(point, 'T03', { outOf: all(world, point), ...seen('marks looked for, none for tamper resistance') }));
   if (lacks('weather-resistant') && now.weatherResistant.asked === 'yes')
     rows.push(

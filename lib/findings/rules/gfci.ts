@@ -43,8 +43,11 @@ export const gfciRule: Rule = {
 function trials(point: Point): RawFinding[] {
   const result = point.gfci.at(-1);
   if (!result) return [];
-  const base = { group: point.receptacle.id, receptacleIds: [point.receptacle.id], readingIds: [result.reading.id] };
+  // A point that stays dead behind a device belongs to that device.
+  const device = result.trial.device === 'downstream' ? result.reading.evidence.upstreamReceptacleId : undefined;
   const told = TOLD[result.assessment.verdict];
+  const group = told?.code === 'G03' ? (device ?? point.receptacle.id) : point.receptacle.id;
+  const base = { group, receptacleIds: [point.receptacle.id], readingIds: [result.reading.id] };
   const rows: RawFinding[] = told ? [{ ...base, ...told, values: { ...trialValues(result), ...told.values } }] : [];
   if (result.assessment.verdict === 'breaker-type-unproven' && knownOtherBreaker(result))
     rows.push({ ...base, code: 'G19', values: trialValues(result) });

@@ -77,8 +77,9 @@ function voltageDrop(point: Point): RawFinding[] {
     leadingConditions(diagnosis).some((condition) => condition.startsWith('high-resistance-')),
   );
   if (!test || poorJoint) return [];
-  const { dropPercent, dropVolts, band } = assessLoad(point, test);
-  if (band !== 'above-5' && band !== 'above-8') return [];
+  const assessed = assessLoad(point, test);
+  if (!assessed || (assessed.band !== 'above-5' && assessed.band !== 'above-8')) return [];
+  const { dropPercent, dropVolts, band } = assessed;
   return [
     at(point, 'W12', {
       urgency: band === 'above-8' ? 'U2' : 'U3',
@@ -88,8 +89,9 @@ function voltageDrop(point: Point): RawFinding[] {
   ];
 }
 
-/** The load test with what the circuit says about it. Drop in V rms and percent of the no-load voltage. */
-export function assessLoad(point: Point, test: LoadTest): ReturnType<typeof assessLoadTest> {
+/** The load test with what the circuit says about it; null without a load or a voltage. Drop in V rms and percent. */
+export function assessLoad(point: Point, test: LoadTest): ReturnType<typeof assessLoadTest> | null {
+  if (test.amps <= 0 || test.noLoadHn <= 0) return null;
   const evidence = point.evidence.variants[0];
   const amps = point.circuit?.amps;
   return assessLoadTest(test, {
