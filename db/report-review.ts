@@ -138,7 +138,7 @@ function wordLines(decided: DecidedFinding[]): ReviewLine[] {
           'forbidden-words',
           'findings',
           `Your words on ${finding.place} say what the reading cannot`,
-          `Leave out: ${forbidden.join(', ')}.`,
+          `Leave out: ${[...new Set(forbidden.map(({ word }) => word))].join(', ')}.`,
           { at },
         ),
       );
