@@ -75,6 +75,17 @@ export function receptacleEvidence(
   return { variants, readingIds, conflicts: [...lamps.conflicts, ...sensor.conflicts] };
 }
 
+/**
+ * What one receptacle's readings say together, for a diagnosis on screen while it is typed; the newest lamps count.
+ * Where nothing was read, only what the device and the house say. Throws for a receptacle that is not in the facts.
+ */
+export function wiringEvidence(facts: InspectionFacts, receptacleId: string): WiringEvidence {
+  const receptacle = facts.receptacles.find((row) => row.id === receptacleId);
+  if (!receptacle) throw new Error(`the facts have no receptacle ${receptacleId}`);
+  const { variants } = receptacleEvidence(facts, receptacle, standingReadings(facts.readings));
+  return variants[0] ?? houseEvidence(facts, receptacle);
+}
+
 function hasContent(reading: WiringReading): boolean {
   const { lamps, volts, moreVolts, sensor, groundOhms, groundJumperSeen } = reading.evidence;
   return (

@@ -13,10 +13,10 @@ export { readingGrade } from './wording/reading-grade';
 
 // What the product needs beside the functions of the design.
 export { stillOffPoints, type StillOffPoint } from './still-off';
-export { standingReadings, lampsInWords, voltsInWords, sensorInWords } from './evidence';
+export { standingReadings, wiringEvidence, lampsInWords, voltsInWords, sensorInWords } from './evidence';
 export { CATALOGUE } from './wording/catalogue/all';
 export type { CatalogueEntry } from './wording/catalogue/entry';
-export { CONDITION_WORDS } from './wording/conditions';
+export { CONDITION_WORDS, conditionName } from './wording/conditions';
 export { SKIP_WORDS } from './wording/skip-words';
 export { findForbiddenWords } from './wording/forbidden-words';
 export { findTemplateProblem, renderTemplate, type TemplateProblem } from './wording/template';

@@ -30,6 +30,12 @@ export const CONDITION_WORDS: Record<WiringCondition, string> = {
   'open-ground-energized': 'a ground slot that is cut off from ground and made live by a fault',
 };
 
+/** A condition as a heading. */
+export function conditionName(condition: WiringCondition): string {
+  const words = CONDITION_WORDS[condition];
+  return `${words.charAt(0).toUpperCase()}${words.slice(1)}`;
+}
+
 /** "a, b, or c" */
 export function conditionList(conditions: readonly WiringCondition[]): string {
   return joinWords(
