@@ -2,19 +2,20 @@ import 'server-only';
 import { sql } from 'drizzle-orm';
 import type { Actor } from './actor';
 import { database, type Database } from './client';
+import { withoutValues } from './query-error';
 
 export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
 
 /**
  * Runs `work` in one transaction that row security reads the actor from. The settings end with the transaction, so a
- * connection goes back to the pool without a firm. Rolls back and throws what `work` throws.
+ * connection goes back to the pool without a firm. Rolls back and throws what `work` throws, less the values of a failed statement.
  */
 export async function withActor<Result>(
   actor: Actor,
   work: (tx: Transaction) => Promise<Result>,
   mode?: TransactionMode,
 ): Promise<Result> {
-  return database().transaction(async (tx) => {
+  const running = database().transaction(async (tx) => {
     const { firmId, userId, membershipId, grantId, name } = settingsOf(actor);
     await tx.execute(sql`select
       set_config('app.kind', ${actor.kind}, true), set_config('app.firm_id', ${firmId}, true),
@@ -22,6 +23,9 @@ export async function withActor<Result>(
       set_config('app.grant_id', ${grantId}, true), set_config('app.name', ${name}, true)`);
     return work(tx);
   }, mode);
+  return running.catch((error: unknown) => {
+    throw withoutValues(error);
+  });
 }
 
 type TransactionMode = { isolationLevel: 'repeatable read'; accessMode: 'read only' };

@@ -1,4 +1,5 @@
 import { createHash, randomBytes } from 'node:crypto';
+import { inspect } from 'node:util';
 import { afterAll, expect, test } from 'vitest';
 import { VISITOR, type MemberActor } from '@/db/actor';
 import {
@@ -186,6 +187,21 @@ test('an e-mail without an account gets no link', async () => {
   const link = aLink();
   await requestLink(anEmail(), 'reset', link, 600);
   expect(await findLink(link.tokenHash)).toBeNull();
+});
+
+test('an error of the database repeats none of the values it was given', async () => {
+  const { actor } = await foundFirm();
+  const link = aLink();
+  await requestLink(actor.email, 'reset', link, 600);
+  const failure: unknown = await requestLink(actor.email, 'reset', { ...link, code: 'SECRET-CODE' }, 600).catch(
+    (e) => e,
+  );
+  const cause = (failure as Error).cause as Error;
+  const printed = [String(failure), (failure as Error).stack, inspect(failure), inspect(cause)].join();
+  expect(printed).toContain('request_link');
+  for (const value of [actor.email, link.tokenHash.toString('hex'), link.tokenHash.toString('base64')]) {
+    expect(printed).not.toContain(value);
+  }
 });
 
 test('at most five tries go through, however many ask at once, and each later one waits longer', async () => {

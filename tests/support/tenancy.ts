@@ -136,6 +136,7 @@ export const ENTRIES: Record<string, Entry> = {
   'parties.listParties': { asks: (actor, of) => listParties(actor, of.inspectionId) },
   'parties.saveParty': { asks: (actor, of) => saveParty(actor, of.inspectionId, { ...person, id: of.partyId }) },
   'parties.removeParty': { asks: (actor, of) => removeParty(actor, of.inspectionId, of.partyId) },
+  'query-error.withoutValues': { because: WORDS },
   'people.listMembers': { firmOf: people.listMembers },
   'people.loadOwnMember': { firmOf: people.loadOwnMember },
   'people.inviteMember': {

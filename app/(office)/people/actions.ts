@@ -30,7 +30,7 @@ export async function inviteAction(_: InviteState, form: FormData): Promise<Invi
   switch (outcome.kind) {
     case 'invited':
       revalidatePath('/people');
-      return { name: '', email: '', roles: [], problems: [], invited: parsed.data.email };
+      return { name: '', email: '', roles: ['inspector'], problems: [], invited: parsed.data.email };
     case 'already-member':
       return {
         ...typed,
