@@ -66,7 +66,7 @@ function byArea(points: Point[]): [string, Point[]][] {
 }
 
 function labels(points: Point[]): string {
-  return points.map((point) => point.receptacle.label).join('; ');
+  return points.map((point) => point.name).join('; ');
 }
 
 function distancesMissing(world: World): Gap[] {

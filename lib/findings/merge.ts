@@ -175,10 +175,14 @@ function placeWords(raw: RawFinding, members: RawFinding[], points: Point[], wor
   return `${joinWords(areas.slice(0, 3), 'and')}${areas.length > 3 ? ' and more' : ''}, ${points.length} receptacles`;
 }
 
+/** One sentence per room: "Hall: left, right. Bedroom: by the door". The template ends the last one. */
 function listPlaces(points: Point[]): string {
-  const named = points.slice(0, NAMED_PLACES).map((point) => point.place);
-  const more = points.length - named.length;
-  return more > 0 ? `${named.join('; ')}; and ${more} more` : named.join('; ');
+  const rooms = new Map<string, string[]>();
+  for (const { area, name } of points.slice(0, NAMED_PLACES))
+    rooms.set(area.name, [...(rooms.get(area.name) ?? []), name]);
+  const sentences = [...rooms].map(([room, labels]) => `${room}: ${joinWords(labels, 'and')}`);
+  const more = points.length - NAMED_PLACES;
+  return [...sentences, ...(more > 0 ? [`And ${more} more`] : [])].join('. ');
 }
 
 function houseValues(world: World): Finding['values'] {

@@ -1,6 +1,6 @@
 import { assessAfci } from './protection/afci';
 import { assessGfci } from './protection/gfci';
-import { bitsOf, receptacleEvidence, standingReadings, type ReceptacleEvidence } from './evidence';
+import { bitsOf, byOrder, receptacleEvidence, standingReadings, type ReceptacleEvidence } from './evidence';
 import type {
   AfciAssessment,
   AreaFacts,
@@ -35,6 +35,8 @@ export type Point = {
   receptacle: ReceptacleFacts;
   area: AreaFacts;
   circuit?: CircuitFacts;
+  /** "bench left", or "receptacle 3" where nobody wrote a label. */
+  name: string;
   /** "Garage, bench left" */
   place: string;
   readings: ReadingFacts[];
@@ -89,12 +91,14 @@ function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standin
   const readings = standing.filter((reading) => reading.receptacleId === receptacle.id);
   const evidence = receptacleEvidence(facts, receptacle, standing);
   const lamps = evidence.variants[0]?.lamps;
+  const name = receptacle.label.trim() || `receptacle ${numberInArea(facts, receptacle)}`;
   return [
     {
       receptacle,
       area,
       circuit: facts.circuits.find((row) => row.id === receptacle.circuitId),
-      place: `${area.name}, ${receptacle.label}`,
+      name,
+      place: `${area.name}, ${name}`,
       readings,
       evidence,
       diagnoses: evidence.variants.map((variant) => ({ evidence: variant, diagnosis: diagnoseWiring(variant) })),
@@ -110,6 +114,12 @@ function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standin
       protection: { state: 'unknown', readingIds: [], by: '' },
     },
   ];
+}
+
+/** From 1, in the area's order, as Walk numbers them. */
+function numberInArea(facts: InspectionFacts, receptacle: ReceptacleFacts): number {
+  const inArea = facts.receptacles.filter((row) => row.areaId === receptacle.areaId).sort(byOrder);
+  return inArea.findIndex((row) => row.id === receptacle.id) + 1;
 }
 
 function skipOf(facts: InspectionFacts, receptacle: ReceptacleFacts): SkipFacts | undefined {

@@ -55,6 +55,13 @@ describe.each(CATALOGUE.map((entry) => [entry.code, entry] as const))('%s', (_co
       expect(readingGrade(text), text).toBeLessThanOrEqual(8);
   });
 
+  test('what was observed and what it means reads at grade 10 or lower', () => {
+    for (const values of SITUATIONS.filter((row) => row !== EMPTY_VALUES)) {
+      const text = `${renderTemplate(entry.en.observed, values)} ${renderTemplate(entry.en.means, values)}`;
+      expect(readingGrade(text), text).toBeLessThanOrEqual(10);
+    }
+  });
+
   test('it has only letters that fonts have', () => {
     for (const { text } of texts) expect(text).toMatch(/^[\x20-\x7e]*$/);
   });

@@ -22,6 +22,7 @@ describe('the text of a finding', () => {
     expect(unproven.length).toBeGreaterThan(0);
     expect(hazard.signal).toBe(finding.signal);
     expect(readingGrade(composed.plain)).toBeLessThanOrEqual(8);
+    expect(readingGrade(`${composed.observed} ${composed.means}`)).toBeLessThanOrEqual(10);
     for (const text of [...Object.values(parts), ...Object.values(hazard), ...unproven]) {
       expect(findForbiddenWords(text), text).toEqual([]);
       expect(text).not.toMatch(/\{\{|\{%| {2}| \./);

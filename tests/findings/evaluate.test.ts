@@ -360,6 +360,11 @@ describe('evidence', () => {
     expect(says(find(told, 'P02:a'))).toContain('Told: Dell Arden');
   });
 
+  test('a receptacle without a label is named by its number', () => {
+    const facts = one([read('a', '101')], { label: '' });
+    expect(find(facts, 'W02:a')?.place).toBe('Living room, receptacle 1');
+  });
+
   test('photos of the receptacle stand with its finding', () => {
     expect(find(houseOf1988(), 'W08:bed-1')?.photoIds).toEqual(['p1']);
   });

@@ -11,7 +11,11 @@ export type TemplateVariable = {
 /** The names that a template of a finding may use. No others exist; a template with another name is refused. */
 export const TEMPLATE_VARIABLES: readonly TemplateVariable[] = [
   { name: 'place', meaning: 'Where, in words', sample: 'Bedroom 2, by the window' },
-  { name: 'where', meaning: 'Every place, with semicolons between', sample: 'Hall, left; Bedroom 3, by the door' },
+  {
+    name: 'where',
+    meaning: 'Every place, a sentence per room without the last period',
+    sample: 'Hall: left and right. Bedroom 3: by the door',
+  },
   { name: 'count', meaning: 'How many receptacles', sample: 3 },
   { name: 'out_of', meaning: 'How many were looked at for this', sample: 6 },
   { name: 'noun', meaning: 'What is counted', sample: 'receptacles' },

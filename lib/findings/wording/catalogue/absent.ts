@@ -1,7 +1,7 @@
 import type { CatalogueEntry } from './entry';
 import { ELECTRICIAN, SINCE } from './phrases';
 
-const OBSERVED = `Not shown to be protected: {{ where }} ({{ count }} of {{ out_of }} {{ noun }}). No trip was seen{% if device_found == 'no' %}, and no GFCI device was found{% endif %}.`;
+const OBSERVED = `Not shown to be protected: {{ count }} of {{ out_of }} {{ noun }}. {{ where }}. No trip was seen{% if device_found == 'no' %}, and no GFCI device was found{% endif %}.`;
 const DO_NEXT = 'Have a licensed electrician add GFCI protection, or show which device protects these.';
 const CAUTION = 'Until then, treat every outlet named here as not protected.';
 const UNPROVEN =

@@ -35,7 +35,7 @@ export const ARC_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '210.12', since: 1999, confidence: 'high' },
     en: {
       title: 'No AFCI protection recorded for living and sleeping rooms',
-      observed: 'On breakers with no AFCI recorded: {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
+      observed: 'No AFCI is recorded for {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.',
       means: `An AFCI cuts the power when a wire or cord sparks. Current safety practice recommends it for these rooms.${SINCE}`,
       hazardType: 'A fire-safety upgrade that is not there.',
       consequence: 'A damaged wire or cord can spark and start a fire.',

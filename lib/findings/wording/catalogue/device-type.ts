@@ -12,7 +12,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.4(D)(2)(a)', confidence: 'low' },
     en: {
       title: 'Two-slot receptacles',
-      observed: 'Two slots and no ground slot: {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
+      observed: 'Two slots and no ground slot: {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.',
       means: 'They have no ground. People then use adapters, which give none either.',
       hazardType: 'Electric shock from a metal case.',
       consequence: 'A three-prong plug on an adapter has no ground.',
@@ -33,7 +33,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.12', since: 2008, confidence: 'high' },
     en: {
       title: 'No tamper-resistant mark',
-      observed: 'No tamper-resistant mark was found at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
+      observed: 'No tamper-resistant mark was found at {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.',
       means: 'Shutters in the slots keep small fingers and things out.',
       hazardType: 'Injury to a child.',
       consequence: 'A child can push a thing into a slot and be burned.',
@@ -54,7 +54,7 @@ export const DEVICE_TYPE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.9', since: 2008, confidence: 'high' },
     en: {
       title: 'No weather-resistant mark',
-      observed: 'No weather-resistant mark was found at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).',
+      observed: 'No weather-resistant mark was found at {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.',
       means: 'Parts that are not made for the weather rust and fail early.',
       hazardType: 'Early failure outdoors.',
       consequence: 'Rust can spoil the contacts.',

@@ -81,7 +81,7 @@ export const LIVE_ROWS: readonly CatalogueEntry[] = [
     hook: { section: 'C84.1, 230', confidence: 'low' },
     en: {
       title: 'Service neutral may be failing',
-      observed: `{{ where }}: the voltage is off, and neutral to ground stays near zero.${READ}`,
+      observed: `{{ where }}. The voltage is off, and neutral to ground stays near zero.${READ}`,
       means: `${MEANS} Lights that go bright and dim point the same way.`,
       hazardType: 'Fire, and shock from pipes and ground wires.',
       consequence: 'Appliances can burn, and pipes and metal can become live.',

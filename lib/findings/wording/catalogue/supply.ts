@@ -123,7 +123,7 @@ export const SUPPLY_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '408.4', confidence: 'low' },
     en: {
       title: 'A breaker feeds other rooms than its label says',
-      observed: '{{ place }}: the breaker also puts out {{ where }}.',
+      observed: '{{ place }}: the breaker feeds more than its label says. {{ where }}.',
       means: 'The directory at the panel does not tell the whole of what each breaker feeds.',
       hazardType: 'The wrong breaker may be turned off before work.',
       consequence: 'Somebody can touch a wire that they believe is off.',

@@ -12,7 +12,7 @@ export const WIRING_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '406.4, 250.114', confidence: 'low' },
     en: {
       title: 'Three-slot receptacle shows no ground',
-      observed: `No ground shows at {{ where }} ({{ count }} of {{ out_of }} {{ noun }}).{% if live_ground %} The live-wire sensor answers at the ground slot or the cover. That may be stray voltage. Treat it as live.{% endif %}`,
+      observed: `No ground shows at {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.{% if live_ground %} The live-wire sensor answers at the ground slot or the cover. That may be stray voltage. Treat it as live.{% endif %}`,
       means: `Three slots promise a ground that the tester does not find.{% if wiring == 'two-wire' %} Two-wire cable has no ground wire, so this is common in such houses.{% endif %} Which of the two other wires is the hot one cannot be told without a ground.`,
       hazardType: 'Electric shock from a metal case.',
       consequence: 'After a fault in an appliance, its metal case can stay live. Surge strips do not work here.',
@@ -153,7 +153,7 @@ export const WIRING_ROWS: readonly CatalogueEntry[] = [
     hook: { section: '250.142(B), 406.4', confidence: 'low' },
     en: {
       title: `{% if suspicion == 'seen' %}Jumper in place of a ground{% elsif suspicion == 'house' %}Reads correct, but the ground is unproven{% else %}Readings point to a jumper in place of a ground{% endif %}`,
-      observed: `{{ where }}:{% if suspicion == 'seen' %} a jumper to the ground terminal was seen.{% elsif suspicion == 'house' %} a three-slot receptacle reads correct on the lamps, in a house with two-wire cable.{% else %} the load test moves the hot and leaves neutral to ground near zero.{% endif %}`,
+      observed: `{{ where }}.{% if suspicion == 'seen' %} A jumper to the ground terminal was seen.{% elsif suspicion == 'house' %} Three slots read correct on the lamps, in a house with two-wire cable.{% else %} The load test moves the hot and leaves neutral to ground near zero.{% endif %}`,
       means: `{% if suspicion == 'house' %}Two-wire cable has no ground wire. Lamps also read correct where a jumper ties the ground slot to the neutral. The ground is unproven. ${MEANS}{% else %}${MEANS} Lamps and a plain meter read such a jumper as correct.{% endif %}`,
       hazardType: 'Electric shock from a metal case if the neutral comes loose.',
       consequence: 'With a jumper, a broken neutral puts 120 volts on every metal case plugged in.',
