@@ -108,7 +108,8 @@ export const inspections = pgTable(
     index().on(table.firmId, table.scheduledAt, table.id),
     index().on(table.firmId, table.state, table.scheduledAt, table.id),
     index().on(table.firmId, table.number, table.id),
-    index().using('gin', table.searchWords),
+    index().on(table.firmId, table.state, table.number, table.id),
+    index().using('gin', table.searchWords).with({ fastupdate: false }),
   ],
 );
 
