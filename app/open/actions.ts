@@ -3,6 +3,7 @@
 import { headers } from 'next/headers';
 import { redirect } from 'next/navigation';
 import { after } from 'next/server';
+import { replaceExpiredGrant } from '@/db/grants';
 import { replaceExpiredLink } from '@/db/links';
 import { dropSecret, hashSecret, keptSecret } from '@/lib/auth/link-secret';
 import { mintMailedLink } from '@/lib/auth/link-token';
@@ -54,10 +55,16 @@ export async function replaceLinkAction(): Promise<void> {
   if (!secret || wait > 0) redirect('/open/expired?notice=not-sent');
   const oldHash = hashSecret(secret);
   after(() =>
-    replaceExpiredLink(oldHash, mintMailedLink).catch((error: unknown) => {
+    replaceExpired(oldHash).catch((error: unknown) => {
       log.error({ err: error }, 'an expired link could not be replaced');
     }),
   );
   await dropSecret();
   redirect('/open/expired?notice=sent');
+}
+
+/** A link to a report, or a one-time link: a secret belongs to one of them. */
+async function replaceExpired(oldHash: Buffer): Promise<void> {
+  const report = await replaceExpiredGrant(oldHash, mintMailedLink);
+  if (report === 'none') await replaceExpiredLink(oldHash, mintMailedLink);
 }

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { findGrantBySecret } from '@/db/grants';
 import { findLink } from '@/db/links';
 import { BrandMark } from '@/components/brand-mark';
 import { Button } from '@/components/ui/button';
@@ -16,7 +17,7 @@ const NOTICES: Record<string, string> = {
 export default async function ExpiredPage({ searchParams }: PageProps<'/open/expired'>) {
   const { notice } = await searchParams;
   const secret = await keptSecret();
-  const link = secret ? await findLink(hashSecret(secret)) : null;
+  const state = secret ? await stateOf(hashSecret(secret)) : 'unknown';
   const says = typeof notice === 'string' ? NOTICES[notice] : undefined;
   return (
     <main className="mx-auto grid max-w-lg gap-6 px-4 py-8">
@@ -24,7 +25,7 @@ export default async function ExpiredPage({ searchParams }: PageProps<'/open/exp
         <BrandMark />
         Ohmstead
       </p>
-      {says ? <p role="status">{says}</p> : <WhatHappened state={link?.state ?? 'unknown'} />}
+      {says ? <p role="status">{says}</p> : <WhatHappened state={state} />}
       <p>
         <Link href="/sign-in" className="underline">
           Go to sign-in
@@ -34,7 +35,16 @@ export default async function ExpiredPage({ searchParams }: PageProps<'/open/exp
   );
 }
 
-function WhatHappened({ state }: { state: 'ready' | 'used' | 'expired' | 'unknown' }) {
+type LinkState = 'ready' | 'used' | 'expired' | 'unknown';
+
+/** Of a link to a report, or of a one-time link. */
+async function stateOf(hash: Buffer): Promise<LinkState> {
+  const grant = await findGrantBySecret(hash);
+  if (grant) return grant.state === 'revoked' ? 'unknown' : grant.state;
+  return (await findLink(hash))?.state ?? 'unknown';
+}
+
+function WhatHappened({ state }: { state: LinkState }) {
   switch (state) {
     case 'expired':
       return (
