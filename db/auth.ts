@@ -132,3 +132,11 @@ export async function listOwnFirms(actor: MemberActor): Promise<{ firmId: string
     return rows.map((row) => ({ firmId: row.firm_id, firmName: row.firm_name }));
   });
 }
+
+/** Deletes attempts, links and sessions that ended long ago. Answers how many rows. For the worker's sweep. */
+export async function sweepSignIn(actor: VisitorActor): Promise<number> {
+  return withActor(actor, async (tx) => {
+    const { rows } = await tx.execute<{ gone: number }>(sql`select sweep_sign_in() as gone`);
+    return rows[0]?.gone ?? 0;
+  });
+}

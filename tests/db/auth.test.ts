@@ -10,6 +10,7 @@ import {
   findAccount,
   findSessionMember,
   openSession,
+  sweepSignIn,
   takeAttempt,
 } from '@/db/auth';
 import { closeDatabase } from '@/db/client';
@@ -187,6 +188,23 @@ test('an e-mail without an account gets no link', async () => {
   const link = aLink();
   await requestLink(anEmail(), 'reset', link, 600);
   expect(await findLink(link.tokenHash)).toBeNull();
+});
+
+test('what ended long ago is swept away, and nothing that still counts', async () => {
+  const { actor } = await foundFirm();
+  const [old, fresh] = [await signIn(actor.userId), await signIn(actor.userId)];
+  const [oldLink, freshLink] = [aLink(), aLink()];
+  await requestLink(actor.email, 'reset', oldLink, 600);
+  await asOwner(`update link_tokens set expires_at = now() - interval '61 days' where token_hash = $1`, [
+    oldLink.tokenHash,
+  ]);
+  await requestLink(actor.email, 'reset', freshLink, 600);
+  await asOwner(`update sessions set last_seen_at = now() - interval '61 days' where id_hash = $1`, [old]);
+  expect(await sweepSignIn(VISITOR)).toBeGreaterThanOrEqual(2);
+  expect(await findLink(oldLink.tokenHash)).toBeNull();
+  expect(await findLink(freshLink.tokenHash)).toMatchObject({ state: 'ready' });
+  expect(await findSessionMember(VISITOR, fresh)).not.toBeNull();
+  expect(await asOwner('select from sessions where id_hash = $1', [old])).toEqual([]);
 });
 
 test('an error of the database repeats none of the values it was given', async () => {

@@ -83,6 +83,7 @@ export const ENTRIES: Record<string, Entry> = {
   'auth.endOwnSessions': { because: JUST_OWN },
   'auth.changeOwnPassword': { because: JUST_OWN },
   'auth.createFirm': { because: DOOR },
+  'auth.sweepSignIn': { because: 'Names no row: it deletes what ended two days to two months ago.' },
   'auth.listOwnFirms': { firmOf: listOwnFirms },
   'booking-rules.isTimeZone': { because: WORDS },
   'booking-rules.isWallTime': { because: WORDS },
