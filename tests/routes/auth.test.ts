@@ -130,6 +130,23 @@ describe.skipIf(!app)('the running program', () => {
     expect(right.headers.get('location')).toMatch(/\/reset-password$/);
   });
 
+  test('takes a form of its own page that sends no origin, and no form of another site', async () => {
+    const { email } = await aPerson();
+    const send = (headers: Record<string, string>) =>
+      postForm(at('/open'), { email, code: 'ZZZZZ-22222' }, { headers });
+    const own = await send({ origin: 'null', 'sec-fetch-site': 'same-origin' });
+    expect(await own.text()).toContain('do not belong together');
+    for (const headers of [
+      { origin: 'null', 'sec-fetch-site': 'cross-site' },
+      { origin: 'null' },
+      { origin: 'https://elsewhere.example', 'sec-fetch-site': 'cross-site' },
+    ]) {
+      const foreign = await send(headers);
+      expect(foreign.status).toBeGreaterThanOrEqual(400);
+      expect(await foreign.text()).not.toContain('do not belong together');
+    }
+  });
+
   test('answers a request for a reset the same with and without an account', async () => {
     const { email } = await aPerson();
     const stranger = anEmail();
