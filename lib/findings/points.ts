@@ -118,7 +118,9 @@ function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standin
 
 /** From 1, in the area's order, as Walk numbers them. */
 function numberInArea(facts: InspectionFacts, receptacle: ReceptacleFacts): number {
-  const inArea = facts.receptacles.filter((row) => row.areaId === receptacle.areaId).sort(byOrder);
+  const inArea = facts.receptacles
+    .filter((row) => row.areaId === receptacle.areaId && row.presence === 'present')
+    .sort(byOrder);
   return inArea.findIndex((row) => row.id === receptacle.id) + 1;
 }
 

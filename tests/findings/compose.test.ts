@@ -3,7 +3,8 @@ import { checkTemplate, composeFinding, evaluateInspection, originalTemplate, wh
 import type { Finding } from '@/lib/findings/facts';
 import { findForbiddenWords } from '@/lib/findings/wording/forbidden-words';
 import { readingGrade } from '@/lib/findings/wording/reading-grade';
-import { houseOf1962, houseOf1988, houseOf2021 } from '../support/facts';
+import { houseOf2021 } from '../support/house-of-2021';
+import { houseOf1962, houseOf1988 } from '../support/houses';
 
 const ALL = [houseOf1962(), houseOf1988(), houseOf2021()].flatMap((facts) => evaluateInspection(facts).findings);
 

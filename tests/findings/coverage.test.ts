@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import { checkCoverage } from '@/lib/findings';
-import { area, emptyHouse, houseOf1988, lamps, notice, read, readings, receptacle } from '../support/facts';
+import { area, emptyHouse, lamps, notice, read, readings, receptacle } from '../support/facts';
+import { houseOf1988 } from '../support/houses';
 
 test('an inspection without areas is not complete', () => {
   expect(checkCoverage(emptyHouse({ areas: [] })).complete).toBe(false);

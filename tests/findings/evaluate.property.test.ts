@@ -3,7 +3,8 @@ import { expect, test } from 'vitest';
 import { evaluateInspection } from '@/lib/findings';
 import type { InspectionFacts, ReadingFacts } from '@/lib/findings/facts';
 import { PHYSICAL_SIGNS, PLACES, STATE_PROFILES, WIRING_METHODS } from '@/lib/findings/vocabulary';
-import { area, circuit, emptyHouse, houseOf1962, houseOf1988, lamps, readings, receptacle } from '../support/facts';
+import { area, circuit, emptyHouse, lamps, readings, receptacle } from '../support/facts';
+import { houseOf1962, houseOf1988 } from '../support/houses';
 
 const IDS = ['a', 'b', 'c', 'd', 'e'];
 const AREAS = ['north', 'south'];

@@ -1,7 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { composeFinding, evaluateInspection } from '@/lib/findings';
 import type { InspectionFacts } from '@/lib/findings/facts';
-import { houseOf1962, houseOf1988, houseOf2021 } from '../support/facts';
+import { houseOf2021 } from '../support/house-of-2021';
+import { houseOf1962, houseOf1988 } from '../support/houses';
 
 /** Whole inspections and their text. A change of wording shows in the diff; `vitest -u` writes the files anew. */
 const HOUSES: [string, () => InspectionFacts][] = [
