@@ -14,8 +14,7 @@ const noClock = (name) => ({ name, message: `lib/findings is pure: no ${name}.` 
 
 export default defineConfig([
   globalIgnores([
-    '.next/**',
-    '.next-test/**',
+    '.next*/**',
     '.ohmstead*/**',
     'dist/**',
     'coverage/**',
