@@ -181,7 +181,9 @@ function recordLines(sources: ReportSources): ReviewLine[] {
   const { pages } = stateProfile(inspection.stateProfile);
   if (pages.licenseNumber && !signer.licenseNumber)
     lines.push(
-      line('license', 'me', 'Your license number is missing', `${stateName(sources)} wants it on the report.`),
+      line('license', 'me', 'Your license number is missing', `${stateName(sources)} wants it on the report.`, {
+        overridable: inspection.stateProfile === 'general',
+      }),
     );
   if (pages.sponsorLicense && !firm.licenseNumber)
     lines.push(

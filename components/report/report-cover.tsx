@@ -1,9 +1,10 @@
-import { Image, Text, View } from '@react-pdf/renderer';
+import { Image as PdfImage, Text, View } from '@react-pdf/renderer';
 import { dayIn } from '@/lib/messages/dates';
-import { coverFacts } from './report-facts';
+import { coverFacts, grouped } from './report-facts';
 import type { ReportPrint } from './report-context';
 import { ReportPage } from './report-page';
 import { EmptyRing } from './report-drawing';
+import { pictureSource } from './report-photos';
 import { styles, SERIF } from './report-styles';
 
 /** Whose report, of which house, by whom, and which version. */
@@ -13,9 +14,7 @@ export function ReportCover({ print }: { print: ReportPrint }) {
   return (
     <ReportPage print={print} title={inspection.street}>
       <View style={[styles.row, { alignItems: 'center', marginBottom: 14 }]}>
-        {logo && (
-          <Image src={{ data: logo, format: 'jpg' }} style={{ maxWidth: 110, maxHeight: 44, marginRight: 12 }} />
-        )}
+        {logo && <PdfImage src={pictureSource(logo)} style={{ maxWidth: 110, maxHeight: 44, marginRight: 12 }} />}
         <Text style={styles.h2}>{firm.name}</Text>
       </View>
       <EmptyRing width={190} />
@@ -41,9 +40,4 @@ export function ReportCover({ print }: { print: ReportPrint }) {
       </Text>
     </ReportPage>
   );
-}
-
-/** In groups of four, so that a person can compare it and the line can break. */
-export function grouped(sha256: string): string {
-  return sha256.replaceAll(/(.{4})(?=.)/g, '$1 ');
 }

@@ -4,6 +4,7 @@ import type { SnapshotFinding } from '@/lib/schemas/snapshot';
 import { bookmark, type ReportPrint } from './report-context';
 import { ReadingDrawing, WiresDrawing } from './report-drawing';
 import { readingWords, wiresWords } from './report-drawing-words';
+import { headline } from './report-facts';
 import { HazardTag } from './report-hazard';
 import { startsPage } from './report-order';
 import { Anchor } from './report-page';
@@ -61,10 +62,6 @@ export function ReportFinding({ print, finding }: { print: ReportPrint; finding:
       <PhotoRows print={print} photoIds={morePhotos} />
     </View>
   );
-}
-
-export function headline(finding: SnapshotFinding, title: string): string {
-  return `${finding.place}: ${title.charAt(0).toLowerCase()}${title.slice(1)}`;
 }
 
 function Figures({ print, finding, photoId }: { print: ReportPrint; finding: SnapshotFinding; photoId?: string }) {

@@ -1,9 +1,10 @@
-import { Image, Text, View } from '@react-pdf/renderer';
+import { Image as PdfImage, Text, View } from '@react-pdf/renderer';
 import { dateTimeIn } from '@/lib/messages/dates';
 import { wordsIn, type ReportPrint } from './report-context';
-import { grouped } from './report-cover';
+import { signatureFacts } from './report-facts';
 import { Anchor, ReportPage } from './report-page';
 import { Limits, Section } from './report-parts';
+import { pictureSource } from './report-photos';
 import { SERIF, styles } from './report-styles';
 
 /** What the readings leave open. */
@@ -88,31 +89,15 @@ function LimitLines({ print }: { print: ReportPrint }) {
 
 function Signature({ print }: { print: ReportPrint }) {
   const { messages, snapshot, sha256, signatureImage } = print;
-  const { signature, stateProfile, inspection } = snapshot;
+  const { signature, inspection } = snapshot;
   const license = signature.licenseNumber ? `, ${messages.license(signature.licenseNumber)}` : '';
-  const facts = [
-    [
-      messages.signature.version,
-      messages.cover.versionLine(snapshot.number, dateTimeIn(inspection.timeZone, snapshot.releasedAt)),
-    ],
-    [messages.signature.reason, snapshot.reason ?? ''],
-    [messages.signature.changes, snapshot.changes.join(' ')],
-    [messages.signature.overrides, snapshot.overrides.map(({ says, reason }) => `${says} ${reason}`).join(' ')],
-    [
-      messages.signature.profile(stateProfile.name),
-      stateProfile.duties.map(({ says, section }) => `${says} (${section})`).join(' ') +
-        (stateProfile.duties.length > 0 ? ` ${messages.signature.confirm}` : ''),
-    ],
-    [messages.signature.renderer, snapshot.renderer],
-    [messages.cover.hash, grouped(sha256)],
-  ].filter(([, value]) => value !== '');
   return (
     <View wrap={false}>
       <Section title={messages.signature.title}>
         <View style={{ marginVertical: 10 }}>
           {signatureImage ? (
-            <Image
-              src={{ data: signatureImage, format: 'jpg' }}
+            <PdfImage
+              src={pictureSource(signatureImage)}
               style={{ height: 40, objectFit: 'contain', objectPosition: '0 0' }}
             />
           ) : (
@@ -125,7 +110,7 @@ function Signature({ print }: { print: ReportPrint }) {
             )}
           </Text>
         </View>
-        {facts.map(([term, value]) => (
+        {signatureFacts(snapshot, sha256, messages).map(([term, value]) => (
           <View key={term} style={styles.fact}>
             <Text style={styles.term}>{term}</Text>
             <Text style={styles.grow}>{value}</Text>

@@ -1,4 +1,4 @@
-import { Image, Text, View } from '@react-pdf/renderer';
+import { Image as PdfImage, Text, View } from '@react-pdf/renderer';
 import { timeIn } from '@/lib/messages/dates';
 import type { SnapshotPhoto } from '@/lib/schemas/snapshot';
 import type { ReportPrint } from './report-context';
@@ -34,7 +34,7 @@ function Picture({ print, photoId, height }: { print: ReportPrint; photoId: stri
   if (!photo || !bytes) return null;
   return (
     <View>
-      <Image src={{ data: bytes, format: 'jpg' }} style={{ height, objectFit: 'contain', objectPosition: '0 100%' }} />
+      <PdfImage src={pictureSource(bytes)} style={{ height, objectFit: 'contain', objectPosition: '0 100%' }} />
       <Text style={{ fontSize: 8.5, marginTop: 4 }}>
         <Text style={styles.bold}>{photoLine(print, photo)}</Text>
         {photo.caption ? `. ${photo.caption}` : ''}
@@ -46,4 +46,9 @@ function Picture({ print, photoId, height }: { print: ReportPrint; photoId: stri
 function photoLine({ messages, snapshot }: ReportPrint, photo: SnapshotPhoto): string {
   const time = photo.takenAt ? `, ${timeIn(snapshot.inspection.timeZone, photo.takenAt)}` : '';
   return `${messages.finding.photo(photo.number)}${time}`;
+}
+
+/** Bytes of a picture with what they are, by their first byte: PNG or JPEG, the two that the PDF takes. */
+export function pictureSource(data: Buffer): { data: Buffer; format: 'png' | 'jpg' } {
+  return { data, format: data[0] === 0x89 ? 'png' : 'jpg' };
 }

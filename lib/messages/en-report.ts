@@ -240,6 +240,30 @@ export const enReport = {
   limits: {
     title: 'Limits of these tests',
   },
+  web: {
+    findings: 'Every finding',
+    house: 'The house and the visit',
+    unknown: 'What this does not tell you',
+    untested: (count: number) =>
+      count === 1
+        ? 'One receptacle was not tested. The reason stands below.'
+        : `${count} receptacles were not tested. The reasons stand below.`,
+    unproven: (count: number) =>
+      count === 1 ? 'One reading leaves a question open.' : `${count} readings leave a question open.`,
+    always: [
+      'Nothing was taken apart. We say what the readings most often mean.',
+      'Lamps cannot see every fault. This is not a code-compliance inspection.',
+    ],
+    readMore: 'Read the finding',
+    pdf: 'Save the PDF',
+    pdfSoon: 'The PDF will be ready in a minute. This page says the same.',
+    olderVersion: (number: number, newest: number) => `This is version ${number}. Version ${newest} has replaced it.`,
+    newest: 'Read the newest version',
+    time: 'Time',
+    instrument: 'Instrument',
+    showed: 'What it showed',
+    photoOf: (number: number, place: string) => `Photo ${number}, ${place}`,
+  },
   signature: {
     title: 'Signature and record',
     signed: (name: string, when: string) => `Signed by ${name}, ${when}`,

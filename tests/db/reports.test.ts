@@ -32,7 +32,7 @@ describe('what holds a release', () => {
   test('the signature is the signer’s own, and its absence holds the release', async () => {
     const { firm } = await readyToRelease();
     const outcome = await releaseReport(firm.actor, firm.inspection.id);
-    expect(outcome.kind === 'held' && codes(outcome.lines)).toEqual(['signature']);
+    expect(outcome.kind === 'held' && codes(outcome.lines)).toEqual(['signature', 'license']);
   });
 
   test('words that a reading cannot prove hold it, and cannot be overridden', async () => {
