@@ -84,17 +84,9 @@ export async function recordStored(
   return changePhoto(actor, photoId, async (tx, photo, version) => {
     if (photo.sha256 !== stored.sha256) return { kind: 'other-bytes' };
     if (photo.state === 'stored') return { kind: 'recorded' };
-    const { width, height, sha256Of1600, sha256Of480, takenAt } = stored;
-    await tx
-      .update(photos)
-      .set({
-        ...{ width, height, sha256Of1600, sha256Of480, version },
-        ...(takenAt ? { takenAt } : {}),
-        state: 'stored',
-        refusal: null,
-        storedAt: new Date(),
-      })
-      .where(and(eq(photos.firmId, photo.firmId), eq(photos.id, photo.id)));
+    const { width, height, sha256Of1600, sha256Of480, takenAt = photo.takenAt } = stored;
+    const made = { width, height, sha256Of1600, sha256Of480, takenAt };
+    await write(tx, photo, version, { ...made, state: 'stored', refusal: null, storedAt: new Date() });
     await recordAudit(tx, photo.inspectionId, 'photo.stored', { id: photo.id, sha256: photo.sha256 });
     return { kind: 'recorded' };
   });
@@ -108,18 +100,15 @@ export async function recordRefused(
 ): Promise<RecordPhotoOutcome> {
   return changePhoto(actor, photoId, async (tx, photo, version) => {
     if (photo.state === 'stored') return { kind: 'recorded' };
-    await tx
-      .update(photos)
-      .set({ state: 'refused', refusal, version })
-      .where(and(eq(photos.firmId, photo.firmId), eq(photos.id, photo.id)));
+    await write(tx, photo, version, { state: 'refused', refusal });
     await recordAudit(tx, photo.inspectionId, 'photo.refused', { id: photo.id, refusal });
     return { kind: 'recorded' };
   });
 }
 
-type Change = (tx: Transaction, photo: typeof photos.$inferSelect, version: number) => Promise<RecordPhotoOutcome>;
+type Change = (tx: Transaction, photo: PhotoRow, version: number) => Promise<RecordPhotoOutcome>;
 
-/** Changes a photo under its inspection's lock, and raises the inspection's version so that phones see it. */
+/** Changes a photo under its inspection's lock; a change raises the inspection's version so that phones see it. */
 async function changePhoto(
   actor: MemberActor | SystemActor,
   photoId: string,
@@ -133,11 +122,24 @@ async function changePhoto(
     if (!inspection) return { kind: 'not-found' };
     const [photo] = await tx.select().from(photos).where(isPhoto);
     if (!photo) return { kind: 'not-found' };
-    const version = inspection.version + 1;
-    await tx
-      .update(inspections)
-      .set({ version })
-      .where(and(eq(inspections.firmId, inspection.firmId), eq(inspections.id, inspection.id)));
-    return change(tx, photo, version);
+    return change(tx, photo, inspection.version + 1);
   });
+}
+
+type PhotoRow = typeof photos.$inferSelect;
+
+async function write(
+  tx: Transaction,
+  { firmId, id, inspectionId }: PhotoRow,
+  version: number,
+  fields: Partial<PhotoRow>,
+) {
+  await tx
+    .update(photos)
+    .set({ ...fields, version })
+    .where(and(eq(photos.firmId, firmId), eq(photos.id, id)));
+  await tx
+    .update(inspections)
+    .set({ version })
+    .where(and(eq(inspections.firmId, firmId), eq(inspections.id, inspectionId)));
 }
