@@ -1,12 +1,10 @@
-import { bitsOf } from './evidence';
 import { isTested, needsTrial } from './coverage';
 import type { Finding, Gap, SkipFacts } from './facts';
+import { gapAt, type GapKind } from './gap-at';
 import { houseGaps } from './gaps-house';
+import { conflicts, missingGround, wiringUnproven } from './gaps-wiring';
 import type { AfciResult, GfciResult, Point, World } from './points';
-import { assessLoad } from './rules/supply';
-import { leadingConditions } from './rules/wiring';
 import { stillOffCircuits } from './still-off';
-import { conditionList } from './wording/conditions';
 import { SKIP_WORDS } from './wording/skip-words';
 
 /** What stays unproven, incomplete, in conflict, off or untold, in walking order. Each says what would settle it. */
@@ -27,41 +25,12 @@ export function collectGaps(world: World, findings: readonly Finding[]): Gap[] {
   ];
 }
 
-type Kind = Gap['kind'];
-
-function gapAt(point: Point, kind: Kind, about: string, says: string, readingIds: string[] = []): Gap {
-  const { id, areaId } = point.receptacle;
-  return { id: `${kind}:${about}:${id}`, kind, receptacleId: id, areaId, place: point.place, says, readingIds };
-}
-
 function offPoint(point: Point, world: World): Gap[] {
   const off = world.stillOff.find((row) => row.receptacleId === point.receptacle.id);
   if (!off) return [];
   const says =
     'A trip test put this out, and nothing recorded shows that it is back on. Turn it back on, or hand it over.';
   return [gapAt(point, 'still-off', 'trial', says, [off.readingId])];
-}
-
-function conflicts(point: Point): Gap[] {
-  const fromReadings = point.evidence.conflicts;
-  const fromDiagnosis = point.diagnoses.flatMap(({ diagnosis }) => diagnosis.conflict ?? []);
-  const trial = point.gfci.at(-1);
-  const missedGround = trial?.assessment.conflict ? [trial.assessment.conflict] : [];
-  const trialLamps = lampsChanged(point);
-  const all = [...new Set([...fromReadings, ...fromDiagnosis, ...missedGround, ...trialLamps])];
-  if (all.length === 0) return [];
-  const says = `${all.map(asSentence).join(' ')} Both cannot be right. Read it again and correct the one that is wrong.`;
-  const readingIds = [...point.evidence.readingIds, ...(missedGround.length > 0 && trial ? [trial.reading.id] : [])];
-  return [gapAt(point, 'conflict', 'readings', says, readingIds)];
-}
-
-/** A trial carries the lamps as they were before it; they have to be those that were read then. */
-function lampsChanged(point: Point): string[] {
-  const trial = point.gfci.at(-1)?.reading;
-  const wiring = point.readings.findLast((reading) => reading.kind === 'wiring' && reading.evidence.lamps);
-  if (!trial?.evidence.lamps || wiring?.kind !== 'wiring' || !wiring.evidence.lamps) return [];
-  if (wiring.order > trial.order || bitsOf(wiring.evidence.lamps) === bitsOf(trial.evidence.lamps)) return [];
-  return ['The lamps noted with the trip test differ from the lamps read before it'];
 }
 
 function notTested(point: Point): Gap[] {
@@ -76,84 +45,6 @@ function notTested(point: Point): Gap[] {
 /** The reason of a skip in words, with the inspector's note. */
 export function reasonOf(skip: SkipFacts): string {
   return skip.note ? `${SKIP_WORDS[skip.reason]} (${skip.note})` : SKIP_WORDS[skip.reason];
-}
-
-/** Lamps that read correct prove no ground: where something else leads or stands beside, it is said here. */
-function wiringUnproven(point: Point, findings: readonly Finding[]): Gap[] {
-  const told = (code: string) =>
-    findings.some(
-      (finding) =>
-        finding.code === code &&
-        'receptacleIds' in finding.subject &&
-        finding.subject.receptacleIds.includes(point.receptacle.id),
-    );
-  const read = point.diagnoses[0];
-  if (!read) return [];
-  const { evidence, diagnosis } = read;
-  const leading = leadingConditions(diagnosis);
-  const check = diagnosis.nextCheck ? ` Next check: ${diagnosis.nextCheck.instruction}` : '';
-  const ids = point.evidence.readingIds;
-  const gaps: Gap[] = [];
-
-  const suspected = leading.filter((condition) => condition !== 'correct');
-  const readsCorrect = evidence.lamps !== undefined && bitsOf(evidence.lamps) === '110';
-  const toldByFinding = findings.some(
-    (finding) =>
-      /^W(?!07:house)/.test(finding.id) &&
-      'receptacleIds' in finding.subject &&
-      finding.subject.receptacleIds.includes(point.receptacle.id),
-  );
-  if (readsCorrect && suspected.length > 0 && !toldByFinding)
-    gaps.push(
-      gapAt(
-        point,
-        'unproven',
-        'ground',
-        `${groundOpening(evidence.wiringMethod)}: ${conditionList(suspected)}.${check}`,
-        ids,
-      ),
-    );
-  else if (leading.includes('correct') && suspected.length > 0)
-    gaps.push(gapAt(point, 'unproven', 'wiring', `Also as likely: ${conditionList(suspected)}.${check}`, ids));
-
-  if (evidence.loadTest && !told('W07')) {
-    const ground = assessLoad(point, evidence.loadTest)?.ground;
-    if (ground === 'undecided')
-      gaps.push(
-        gapAt(
-          point,
-          'unproven',
-          'load-test',
-          'The load test does not decide whether the ground is a wire of its own or a jumper.',
-          ids,
-        ),
-      );
-    if (ground === 'suspected')
-      gaps.push(
-        gapAt(
-          point,
-          'unproven',
-          'load-test',
-          'The load test points to a jumper between neutral and ground, if the receptacle is not near the panel.',
-          ids,
-        ),
-      );
-  }
-  return gaps;
-}
-
-function groundOpening(wiring: string | undefined): string {
-  return wiring === 'two-wire'
-    ? 'The lamps read correct, and the house has two-wire cable. The ground is unproven. Most often a reading like this means'
-    : 'The lamps read correct. That is unproven: the evidence points to';
-}
-
-/** Protected, marked and without a ground: nothing to repair, and still no ground. */
-function missingGround(point: Point): Gap[] {
-  if (point.protection.state !== 'yes' || point.ground !== 'none' || point.receptacle.pattern === '1-15R') return [];
-  const says =
-    'A GFCI reduces shock here; it gives no ground. Not for refrigerators, washers or anything that needs a ground. A plug-in tester needs a ground to trip a GFCI, so here its result says nothing.';
-  return [gapAt(point, 'unproven', 'no-ground', says, [...point.evidence.readingIds, ...point.protection.readingIds])];
 }
 
 const UNTESTED_VERDICTS = new Set(['not-tested', 'reason-required']);
@@ -184,7 +75,7 @@ function doNotTrip(point: Point): Gap[] {
   return [gapAt(point, 'not-tested', 'gfci', says)];
 }
 
-function gfciKind(result: GfciResult, point: Point, findings: readonly Finding[]): Kind | null {
+function gfciKind(result: GfciResult, point: Point, findings: readonly Finding[]): GapKind | null {
   const { verdict } = result.assessment;
   if (UNTESTED_VERDICTS.has(verdict)) return 'not-tested';
   if (INCOMPLETE_VERDICTS.has(verdict)) return 'incomplete';
@@ -208,7 +99,7 @@ function afciGaps(point: Point): Gap[] {
     : [];
 }
 
-function afciKind({ assessment }: AfciResult): Kind | null {
+function afciKind({ assessment }: AfciResult): GapKind | null {
   if (assessment.verdict === 'not-tested' || assessment.verdict === 'reason-required') return 'not-tested';
   if (assessment.verdict === 'incomplete') return 'incomplete';
   return assessment.verdict === 'indication-only' || assessment.verdict === 'inconclusive' ? 'unproven' : null;
@@ -289,8 +180,4 @@ function notTold(world: World, findings: readonly Finding[]): Gap[] {
         },
       ];
     });
-}
-
-function asSentence(text: string): string {
-  return text.endsWith('.') ? text : `${text}.`;
 }

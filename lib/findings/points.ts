@@ -66,9 +66,10 @@ export type World = {
 /** Everything the rules look at, put together once. The order of the facts' rows changes nothing. */
 export function buildWorld(facts: InspectionFacts): World {
   const standing = standingReadings(facts.readings);
+  const diagnose = diagnoseOnce();
   const points = facts.receptacles
     .filter((receptacle) => receptacle.presence === 'present')
-    .flatMap((receptacle) => buildPoint(facts, receptacle, standing))
+    .flatMap((receptacle) => buildPoint(facts, receptacle, standing, diagnose))
     .sort(inWalkingOrder);
   const byId = new Map(points.map((point) => [point.receptacle.id, point]));
   const atBreaker = standing.filter((reading) => !reading.receptacleId);
@@ -85,12 +86,29 @@ export function buildWorld(facts: InspectionFacts): World {
   return world;
 }
 
-function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standing: ReadingFacts[]): Point[] {
+/** Most receptacles of a house read the same, and each kind of evidence is diagnosed once. */
+function diagnoseOnce(): (evidence: WiringEvidence) => WiringDiagnosis {
+  const known = new Map<string, WiringDiagnosis>();
+  return (evidence) => {
+    const key = JSON.stringify(evidence);
+    const diagnosis = known.get(key) ?? diagnoseWiring(evidence);
+    known.set(key, diagnosis);
+    return diagnosis;
+  };
+}
+
+function buildPoint(
+  facts: InspectionFacts,
+  receptacle: ReceptacleFacts,
+  standing: ReadingFacts[],
+  diagnose: (evidence: WiringEvidence) => WiringDiagnosis,
+): Point[] {
   const area = facts.areas.find((row) => row.id === receptacle.areaId);
   if (!area) return [];
   const readings = standing.filter((reading) => reading.receptacleId === receptacle.id);
   const evidence = receptacleEvidence(facts, receptacle, standing);
   const lamps = evidence.variants[0]?.lamps;
+  let diagnosed: Point['diagnoses'] | undefined;
   const name = receptacle.label.trim() || `receptacle ${numberInArea(facts, receptacle)}`;
   return [
     {
@@ -101,7 +119,12 @@ function buildPoint(facts: InspectionFacts, receptacle: ReceptacleFacts, standin
       place: `${area.name}, ${name}`,
       readings,
       evidence,
-      diagnoses: evidence.variants.map((variant) => ({ evidence: variant, diagnosis: diagnoseWiring(variant) })),
+      get diagnoses() {
+        return (diagnosed ??= evidence.variants.map((variant) => ({
+          evidence: variant,
+          diagnosis: diagnose(variant),
+        })));
+      },
       ground: groundOf(lamps ?? trialLamps(readings)),
       gfci: readings.flatMap((reading) => (reading.kind === 'gfci' ? gfciResult(reading, lamps) : [])),
       afci: readings.flatMap((reading) => (reading.kind === 'afci' ? afciResult(reading) : [])),

@@ -94,6 +94,10 @@ describe('evidence', () => {
     expect(says(find(told, 'P02:a'))).toContain('Told: Dell Arden');
   });
 
+  test('a dim lamp is unproven, and never clean', () => {
+    expect(gapsAt(one([read('a', '1d0')]), 'a').join()).toContain('A lamp is dim');
+  });
+
   test('a receptacle without a label is named by its number', () => {
     const facts = one([read('a', '101')], { label: '' });
     expect(find(facts, 'W02:a')?.place).toBe('Living room, receptacle 1');

@@ -54,6 +54,8 @@ function findAt(point: Point, read: Read, world: World): RawFinding[] {
 
   const gravity = gravityOf(code, evidence, diagnosis);
   const leading = leadingConditions(diagnosis);
+  const possible = possibleConditions(diagnosis);
+  const drawn = leading.find((condition) => condition !== 'correct' && CODE_OF[condition] === code) ?? leading[0];
   return [
     {
       code,
@@ -64,13 +66,13 @@ function findAt(point: Point, read: Read, world: World): RawFinding[] {
       readingIds: point.evidence.readingIds,
       ...gravity,
       values: wiringValues(point, read, code),
-      unproven: diagnosis.notProven,
+      unproven: [...diagnosis.notProven, ...notRuledOut(possible)],
       drawing: {
         pattern: point.receptacle.pattern,
         device: point.receptacle.device,
         ...(evidence.lamps ? { lamps: evidence.lamps } : {}),
         ...(evidence.volts ? { volts: evidence.volts } : {}),
-        ...(leading[0] ? { condition: leading[0] } : {}),
+        ...(drawn ? { condition: drawn } : {}),
       },
       ...(code === 'W01'
         ? { outOf: { count: countThreeSlots(point, world), noun: 'three-slot receptacles that were read' } }
@@ -84,6 +86,33 @@ export function leadingConditions(diagnosis: WiringDiagnosis): WiringCondition[]
   return diagnosis.candidates.filter((row) => row.standing === 'leading').map((row) => row.condition);
 }
 
+function possibleConditions(diagnosis: WiringDiagnosis): WiringCondition[] {
+  return diagnosis.candidates
+    .filter((row) => row.standing === 'possible' && row.condition !== 'correct')
+    .map((row) => row.condition);
+}
+
+/** Conditions that hide behind almost any reading without a load. A sentence names the others. */
+const HIDDEN_WITHOUT_LOAD = new Set<WiringCondition>([
+  'high-resistance-ground',
+  'high-resistance-hot',
+  'high-resistance-neutral',
+  'shared-neutral-open',
+  'service-neutral-open',
+]);
+const NAMED_CONDITIONS = 3;
+
+function alsoPossible(possible: WiringCondition[]): string {
+  if (possible.length <= NAMED_CONDITIONS) return conditionList(possible);
+  const named = possible.filter((condition) => !HIDDEN_WITHOUT_LOAD.has(condition));
+  return named.length > 0 ? conditionList(named) : 'faults that show only under load';
+}
+
+/** The report keeps the whole list, whatever the sentence names. */
+function notRuledOut(possible: WiringCondition[]): string[] {
+  return possible.length > 0 ? [`Not ruled out: ${conditionList(possible)}.`] : [];
+}
+
 function codeOf(evidence: WiringEvidence, diagnosis: WiringDiagnosis): string | null {
   const bits = evidence.lamps && bitsOf(evidence.lamps);
   if (bits === '110' && groundProvenLive(evidence)) return 'W08';
@@ -94,6 +123,8 @@ function codeOf(evidence: WiringEvidence, diagnosis: WiringDiagnosis): string | 
   const first = leading.find((condition) => condition !== 'correct');
   if (!first || leading.includes('correct')) return null;
   const code = CODE_OF[first as keyof typeof CODE_OF];
+  // Lamps that are off show no live ground; that takes a sensor.
+  if (code === 'W16' && !anyLive(evidence)) return 'W05';
   return code === 'W02' && groundProvenLive(evidence) ? 'W17' : code;
 }
 
@@ -147,8 +178,6 @@ function groupOf(code: string, point: Point, evidence: WiringEvidence): string {
 }
 
 function wiringValues(point: Point, { evidence, diagnosis }: Read, code: string): RawFinding['values'] {
-  const leading = leadingConditions(diagnosis);
-  const possible = diagnosis.candidates.filter((row) => row.standing === 'possible').map((row) => row.condition);
   return {
     lamps: evidence.lamps ? lampsInWords(evidence.lamps) : '',
     volts: evidence.volts ? voltsInWords(evidence.volts) : '',
@@ -156,8 +185,8 @@ function wiringValues(point: Point, { evidence, diagnosis }: Read, code: string)
     live_ground: anyLive(evidence),
     loads_unplugged: evidence.loadsUnplugged ?? 'unknown',
     power_checked: evidence.powerChecked === true,
-    most_often: conditionList(leading),
-    also_possible: conditionList(possible.filter((condition) => condition !== 'correct')),
+    most_often: conditionList(leadingConditions(diagnosis)),
+    also_possible: alsoPossible(possibleConditions(diagnosis)),
     next_check: diagnosis.nextCheck?.instruction ?? '',
     ground_ohms: evidence.groundOhms ?? '',
     suspicion: code === 'W07' ? suspicionOf(evidence) : '',

@@ -70,7 +70,7 @@ export const WIRING_ROWS: readonly CatalogueEntry[] = [
         'Have a licensed electrician find the cause before the circuit is used again, and test every receptacle on it.',
       who: ELECTRICIAN_NOW,
       caution: 'Do not open the receptacle and do not unplug what has a metal case while the breaker is on.',
-      unproven: 'Which of the causes it is. Loads that are wired in were not all shown to be off.',
+      unproven: 'Which of the causes it is, and what on the circuit brings the voltage to the neutral slot.',
     },
   },
   {
