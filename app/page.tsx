@@ -20,7 +20,7 @@ export default function FrontPage() {
         <Link href="/sign-in" className="button button-solid">
           Sign in
         </Link>
-        <Link href="/open" className="underline">
+        <Link href="/open" className="inline-flex min-h-[44px] items-center underline">
           I have a link or a short code from a mail
         </Link>
       </p>

@@ -11,7 +11,7 @@ export default function ForgotPasswordPage() {
       <p>Enter the e-mail you sign in with. A link to set a new password comes by mail.</p>
       <ForgotPasswordForm />
       <p className="text-s">
-        <Link href="/sign-in" className="underline">
+        <Link href="/sign-in" className="inline-flex min-h-[44px] items-center underline">
           Back to sign-in
         </Link>
       </p>

@@ -39,7 +39,7 @@ export default async function SignInPage({ searchParams }: PageProps<'/sign-in'>
       {env.SIGN_UP === 'open' && (
         <p className="text-s">
           New here?{' '}
-          <Link href="/sign-up" className="underline">
+          <Link href="/sign-up" className="inline-flex min-h-[44px] items-center underline">
             Set up your firm
           </Link>
         </p>

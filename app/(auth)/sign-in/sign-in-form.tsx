@@ -44,7 +44,7 @@ export function SignInForm({ next }: { next: string }) {
         </Button>
       </p>
       <p className="text-s">
-        <Link href="/forgot-password" className="underline">
+        <Link href="/forgot-password" className="inline-flex min-h-[44px] items-center underline">
           I forgot my password
         </Link>
       </p>

@@ -12,7 +12,7 @@ export default function SignUpPage() {
         <h1 className="font-serif font-bold text-xl">New firms are not taken here</h1>
         <p>Ask the owner of your firm for an invitation. It comes by mail with a link.</p>
         <p>
-          <Link href="/sign-in" className="underline">
+          <Link href="/sign-in" className="inline-flex min-h-[44px] items-center underline">
             Back to sign-in
           </Link>
         </p>
@@ -25,7 +25,7 @@ export default function SignUpPage() {
       <p>You become its owner and first inspector. Others come by invitation.</p>
       <SignUpForm />
       <p className="text-s">
-        <Link href="/sign-in" className="underline">
+        <Link href="/sign-in" className="inline-flex min-h-[44px] items-center underline">
           I have an account
         </Link>
       </p>

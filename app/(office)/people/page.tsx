@@ -44,7 +44,7 @@ export default async function PeoplePage({ searchParams }: PageProps<'/people'>)
         ))}
       </ul>
       <p className="mt-4">
-        <Link href="/people/me" className="underline">
+        <Link href="/people/me" className="inline-flex min-h-[44px] items-center underline">
           Your own name, license, signature and password
         </Link>
       </p>

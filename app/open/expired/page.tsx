@@ -27,7 +27,7 @@ export default async function ExpiredPage({ searchParams }: PageProps<'/open/exp
       </p>
       {says ? <p role="status">{says}</p> : <WhatHappened state={state} />}
       <p>
-        <Link href="/sign-in" className="underline">
+        <Link href="/sign-in" className="inline-flex min-h-[44px] items-center underline">
           Go to sign-in
         </Link>
       </p>
