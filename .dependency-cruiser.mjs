@@ -24,7 +24,14 @@ const config = {
       severity: 'error',
       comment: 'Queries live in db/, where the scope rule lives.',
       from: { path: CODE, pathNot: '^db/' },
-      to: { path: '^node_modules/(drizzle-orm|pg)/|^db/(schema|client|with-actor)', dependencyTypesNot: ['type-only'] },
+      to: { path: '^node_modules/drizzle-orm/|^db/(schema|with-actor)', dependencyTypesNot: ['type-only'] },
+    },
+    {
+      name: 'only-db-and-the-worker-connect',
+      severity: 'error',
+      comment: 'The worker opens the queue connection and closes both; nothing else holds a connection.',
+      from: { path: CODE, pathNot: '^db/|^worker\\.ts$' },
+      to: { path: '^node_modules/pg/|^db/client', dependencyTypesNot: ['type-only'] },
     },
     {
       name: 'nothing-imports-app',

@@ -42,9 +42,12 @@ const IMPORTS: Record<string, { file: string; imports: string }[]> = {
   ],
   'only-db-touches-the-database': [
     { file: 'app/probe/queries.ts', imports: 'drizzle-orm' },
-    { file: 'lib/jobs/queries.ts', imports: 'pg' },
     { file: 'lib/reports/tables.ts', imports: '@/db/schema' },
     { file: 'worker.ts', imports: '@/db/with-actor' },
+  ],
+  'only-db-and-the-worker-connect': [
+    { file: 'lib/jobs/queries.ts', imports: 'pg' },
+    { file: 'app/probe/connects.ts', imports: '@/db/client' },
   ],
   'nothing-imports-app': [{ file: 'lib/mail/page.ts', imports: '@/app/target' }],
   'ui-knows-no-domain': [
@@ -98,6 +101,7 @@ beforeAll(() => {
   for (const { file, imports } of [...Object.values(IMPORTS).flat(), ...ALLOWED]) write(file, `import '${imports}';\n`);
   for (const target of TARGETS) write(`${target}/target.ts`, 'export const target = 1;\n');
   write('db/schema/index.ts', 'export const tables = {};\n');
+  write('db/client.ts', 'export const client = 1;\n');
   write('db/with-actor.ts', 'export const withActor = 1;\n');
   write('lib/walk/one.ts', "import './two';\nexport const one = 1;\n");
   write('lib/walk/two.ts', "import './one';\nexport const two = 2;\n");
