@@ -3,9 +3,10 @@ import { v7 as uuidv7 } from 'uuid';
 import { beforeAll, expect, test } from 'vitest';
 import type { Actor, RecipientActor } from '@/db/actor';
 import { listConflicts } from '@/db/conflicts';
-import { createFirm, createMember, logReceptacle, TestPhone, type TestFirm } from '../support/firm';
+import { bookInspection, createFirm, createMember, logReceptacle, TestPhone, type TestFirm } from '../support/firm';
 import { asOwner } from '../support/owner';
 import { releaseForTest } from '../support/released';
+import { goldenSnapshot } from '../support/snapshot';
 import { ENTRIES, RECIPIENT_ENTRIES, type Target } from '../support/tenancy';
 
 let here: TestFirm;
@@ -50,7 +51,20 @@ async function fill(firm: TestFirm): Promise<Target> {
     membershipId: firm.inspector.membershipId,
     invitedId: invited.membershipId,
     adoptionId,
+    ...(await releaseAnother(firm)),
   };
+}
+
+async function releaseAnother(firm: TestFirm) {
+  const inspection = await bookInspection(firm.office, { leadMembershipId: firm.inspector.membershipId });
+  const { snapshot } = await goldenSnapshot();
+  const { versionId, grantId } = await releaseForTest({ ...firm, inspection }, JSON.stringify(snapshot));
+  await asOwner(
+    `insert into report_files (firm_id, id, report_version_id, locale, renderer, key, bytes, pages, sha256)
+     values ($1, $2, $3, 'en', 'r', 'k', 1, 1, repeat('0', 64))`,
+    [firm.firmId, uuidv7(), versionId],
+  );
+  return { releasedId: inspection.id, versionId, grantId };
 }
 
 function nowhere(): Target {
@@ -92,7 +106,7 @@ const asking = Object.entries(ENTRIES).flatMap(([name, entry]) => ('asks' in ent
 const firmWide = Object.entries(ENTRIES).flatMap(([name, entry]) =>
   'firmOf' in entry ? [[name, entry] as const] : [],
 );
-const ABOUT_INSPECTIONS = /^(audit|bookings|conflicts|inspections|parties|photos|sync)\./;
+const ABOUT_INSPECTIONS = /^(audit|bookings|conflicts|grants|inspections|parties|photos|reports|report-files|sync)\./;
 
 test.each(asking)('%s answers another firm as it does about nothing, and changes nothing there', async (_, entry) => {
   const before = await everythingOf(here);

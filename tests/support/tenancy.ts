@@ -10,6 +10,9 @@ import { listParties, removeParty, saveParty } from '@/db/parties';
 import * as people from '@/db/people';
 import { findPhoto, listPhotos, recordRefused, recordStored } from '@/db/photos';
 import { applyFromDesk, applyOperations } from '@/db/sync';
+import { listGrants, revokeGrant, sendReport } from '@/db/grants';
+import { findReportFile, retryRender } from '@/db/report-files';
+import { findNewestVersion, findVersion, listVersions, releaseReport, reviewInspection } from '@/db/reports';
 import { inspectionFilterSchema } from '@/lib/schemas/inspection';
 import type { Operation } from '@/lib/schemas/operations';
 
@@ -25,6 +28,10 @@ export type Target = {
   membershipId: string;
   invitedId: string;
   adoptionId: string;
+  /** Of another inspection of that firm, which is released. */
+  releasedId: string;
+  versionId: string;
+  grantId: string;
 };
 
 /** How a function of db/ refuses a stranger. */
@@ -38,6 +45,7 @@ export type Entry =
 
 const INSIDE = 'Runs inside the transaction of one of the others, under its row security.';
 const DOOR = 'A door before sign-in: tests/db/auth.test.ts tries it with wrong, used and foreign secrets.';
+const JOB = 'A job of the worker: its actor is in one firm, and row security shows it no other.';
 const WORDS = 'Works on values, not on rows.';
 const JUST_OWN = 'Takes the acting person from the actor and no id.';
 
@@ -106,6 +114,13 @@ export const ENTRIES: Record<string, Entry> = {
     firmOf: (actor) => addAdoption(actor, { place: 'x', edition: 2020, from: '2021-01-01', source: 'x' }),
   },
   'firms.removeAdoption': { asks: (actor, of) => removeAdoption(actor, of.adoptionId), own: false },
+  'grants.sendReport': { asks: (actor, of) => sendReport(actor, of.inspectionId, of.partyId, mint) },
+  'grants.listGrants': { asks: (actor, of) => listGrants(actor, of.releasedId) },
+  'grants.revokeGrant': { asks: (actor, of) => revokeGrant(actor, of.grantId) },
+  'grants.findGrantBySecret': { because: 'A door: the hash of a mailed secret alone finds it.' },
+  'grants.findOpenGrant': { because: 'A door: the caller compares the cookie with the hash it answers.' },
+  'grants.recordOpening': { because: JUST_OWN },
+  'grants.replaceExpiredGrant': { because: 'A door: the hash of a mailed secret alone finds it.' },
   'health.checkHealth': { because: 'Counts no row of a firm.' },
   'inspection-list.readCursor': { because: WORDS },
   'inspection-list.writeCursor': { because: WORDS },
@@ -133,6 +148,9 @@ export const ENTRIES: Record<string, Entry> = {
   'links.redeemSignInLink': { because: DOOR },
   'links.acceptInvitation': { because: DOOR },
   'links.enqueueLinkMail': { because: INSIDE },
+  'messages.beginSending': { because: JOB },
+  'messages.recordSent': { because: JOB },
+  'messages.recordSendFailure': { because: JOB },
   'operations.applyOperation': { because: INSIDE },
   'parties.listParties': { asks: (actor, of) => listParties(actor, of.inspectionId) },
   'parties.saveParty': { asks: (actor, of) => saveParty(actor, of.inspectionId, { ...person, id: of.partyId }) },
@@ -156,6 +174,17 @@ export const ENTRIES: Record<string, Entry> = {
     asks: (actor, of) => recordStored(actor, of.photoId, { ...stored, sha256: of.photoSha256 }),
   },
   'photos.recordRefused': { asks: (actor, of) => recordRefused(actor, of.photoId, 'x') },
+  'report-files.findReportFile': { asks: (actor, of) => findReportFile(actor, of.versionId, 'en') },
+  'report-files.beginRender': { because: JOB },
+  'report-files.recordReportFile': { because: JOB },
+  'report-files.recordRenderFailure': { because: JOB },
+  'report-files.retryRender': { asks: (actor, of) => retryRender(actor, of.versionId) },
+  'reports.reviewInspection': { asks: (actor, of) => reviewInspection(actor, of.inspectionId) },
+  'reports.releaseReport': { asks: (actor, of) => releaseReport(actor, of.inspectionId) },
+  'reports.enqueueRender': { because: INSIDE },
+  'reports.listVersions': { asks: (actor, of) => listVersions(actor, of.releasedId) },
+  'reports.findVersion': { asks: (actor, of) => findVersion(actor, of.versionId) },
+  'reports.findNewestVersion': { asks: (actor, of) => findNewestVersion(actor, of.releasedId) },
   'report-findings.decideFindings': { because: WORDS },
   'report-log.reportLog': { because: WORDS },
   'report-review.reviewSources': { because: WORDS },
@@ -189,4 +218,8 @@ export const RECIPIENT_ENTRIES: Record<string, (actor: Actor, of: Target) => Pro
   'inspections.findInspection': (actor, of) => findInspection(actor, of.inspectionId),
   'photos.findPhoto': (actor, of) => findPhoto(actor, of.photoId),
   'audit.listAudit': (actor, of) => listAudit(actor, of.inspectionId),
+  'reports.listVersions': (actor, of) => listVersions(actor, of.releasedId),
+  'reports.findVersion': (actor, of) => findVersion(actor, of.versionId),
+  'reports.findNewestVersion': (actor, of) => findNewestVersion(actor, of.releasedId),
+  'report-files.findReportFile': (actor, of) => findReportFile(actor, of.versionId, 'en'),
 };
