@@ -136,11 +136,12 @@ describe.skipIf(!app)('the running program', () => {
       postForm(at('/open'), { email, code: 'ZZZZZ-22222' }, { headers });
     const own = await send({ origin: 'null', 'sec-fetch-site': 'same-origin' });
     expect(await own.text()).toContain('do not belong together');
-    for (const headers of [
+    const elsewhere: Record<string, string>[] = [
       { origin: 'null', 'sec-fetch-site': 'cross-site' },
       { origin: 'null' },
       { origin: 'https://elsewhere.example', 'sec-fetch-site': 'cross-site' },
-    ]) {
+    ];
+    for (const headers of elsewhere) {
       const foreign = await send(headers);
       expect(foreign.status).toBeGreaterThanOrEqual(400);
       expect(await foreign.text()).not.toContain('do not belong together');
