@@ -16,7 +16,8 @@ let transport: Transporter | undefined;
 
 /** Hands a letter to the mail server. A repeat carries the same Message-ID, so that a reader's program shows one mail. */
 export async function sendLetter(letter: Letter, envelope: Envelope): Promise<SendOutcome> {
-  transport ??= createTransport(env.SMTP_URL, {
+  transport ??= createTransport({
+    url: env.SMTP_URL,
     connectionTimeout: TIMEOUT_MS,
     greetingTimeout: TIMEOUT_MS,
     socketTimeout: TIMEOUT_MS,
