@@ -84,17 +84,25 @@ async function settle(tx: Transaction, actor: MemberActor, sent: Sent & { parsed
 
 /** Locks the browser's row, made at its first word. Null where it belongs to another person. */
 async function lockClient(tx: Transaction, actor: MemberActor, clientId: string) {
-  await tx
-    .insert(syncClients)
-    .values({ firmId: actor.firmId, id: clientId, userId: actor.userId })
-    .onConflictDoNothing({ target: [syncClients.firmId, syncClients.id] });
+  const found = await selectClient(tx, actor, clientId);
+  if (!found) {
+    await tx
+      .insert(syncClients)
+      .values({ firmId: actor.firmId, id: clientId, userId: actor.userId })
+      .onConflictDoNothing({ target: [syncClients.firmId, syncClients.id] });
+  }
+  const client = found ?? (await selectClient(tx, actor, clientId));
+  if (!client) throw new Error(`insert into sync_clients left no row for ${clientId}`);
+  return client.userId === actor.userId ? client : null;
+}
+
+async function selectClient(tx: Transaction, actor: MemberActor, clientId: string) {
   const [client] = await tx
     .select()
     .from(syncClients)
     .where(and(eq(syncClients.firmId, actor.firmId), eq(syncClients.id, clientId)))
     .for('update');
-  if (!client) throw new Error(`insert into sync_clients left no row for ${clientId}`);
-  return client.userId === actor.userId ? client : null;
+  return client;
 }
 
 async function receiptOf(tx: Transaction, actor: MemberActor, { clientId, n }: Sent): Promise<Receipt> {

@@ -33,6 +33,8 @@ export type Context = {
   unchanged: boolean;
   /** What the audit event says beside the operation. */
   detail: Record<string, unknown>;
+  /** Rows read so far, by entity and id: the inspection's lock keeps others from changing them. */
+  rows: Map<string, unknown>;
 };
 
 /** Thrown to refuse an operation; caught by `applyOperation`, which undoes what was written. */
@@ -76,6 +78,7 @@ export function contextOf(
     merged: false,
     unchanged: false,
     detail: {},
+    rows: new Map(),
   };
 }
 

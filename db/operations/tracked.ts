@@ -51,11 +51,15 @@ function isRow(context: Context, entity: Entity, id: string) {
 
 /** A row of this inspection, deleted or not, or null. */
 export async function findRow(context: Context, entity: Entity, id: string): Promise<TrackedRow | null> {
-  const rows = await context.tx
+  const key = `${entity} ${id}`;
+  const known = context.rows.get(key);
+  if (known) return known as TrackedRow;
+  const [row] = await context.tx
     .select()
     .from(tableOf(entity))
     .where(isRow(context, entity, id));
-  return (rows[0] as TrackedRow | undefined) ?? null;
+  if (row) context.rows.set(key, row);
+  return (row as TrackedRow | undefined) ?? null;
 }
 
 /** A row of this inspection; refuses the operation where there is none. */
