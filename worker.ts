@@ -23,7 +23,7 @@ async function main(): Promise<void> {
     pollInterval: 2000,
     events,
     logger: new Logger(() => (level, message) => {
-      if (level === 'error' || level === 'warning') log.warn({ level }, message);
+      if (level === 'error' || level === 'warning') log.warn({ from: 'queue' }, message);
     }),
   });
   log.info('the worker is ready');
