@@ -83,6 +83,9 @@ test('without an actor, and for a visitor, no table of a firm shows a row or tak
     expect((await pool.query(query)).rows).toEqual([]);
     expect((await withActor(VISITOR, (tx) => tx.execute(sql.raw(query)))).rows).toEqual([]);
   }
+  const view = sql`select id from listed_inspections`;
+  expect((await withActor(VISITOR, (tx) => tx.execute(view))).rows).toEqual([]);
+  expect((await withActor(firm.owner, (tx) => tx.execute(view))).rows).toEqual([{ id: firm.inspection.id }]);
   const insert =
     'insert into adoptions (firm_id, id, place, edition, "from", source) values ($1, $1, $2, 2020, now(), $2)';
   await expect(pool.query(insert, [firm.firmId, 'x'])).rejects.toThrow(/row-level security/);
@@ -148,6 +151,7 @@ test('a recipient sees the released version of one inspection and no row of the 
   const seen = ['report_versions', 'inspections', 'grants', 'parties', 'firms'];
   for (const table of seen) expect([table, await count(table)]).toEqual([table, 1]);
   const hidden = [
+    'listed_inspections',
     'readings',
     'receptacles',
     'areas',
