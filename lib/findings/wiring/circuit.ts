@@ -13,8 +13,6 @@ export type Circuit = {
   /** Nodes held at a potential against earth. */
   sources: Partial<Record<CircuitNode, Phasor>>;
   branches: readonly Branch[];
-  /** One ampere driven into a node and out of another; for an impedance as an instrument sees it. */
-  drive?: { into: CircuitNode; outOf: CircuitNode };
 };
 export type Potentials = Partial<Record<CircuitNode, Phasor>>;
 
@@ -38,32 +36,52 @@ const EARTH: Phasor = { re: 0, im: 0 };
  * Node potentials in V rms at 60 Hz by nodal analysis: Y v = i with Y = G + jB, written as the real system of twice the
  * size [G -B; B G]. Sources are known potentials and move to the right-hand side. Throws where a node hangs on nothing.
  */
-export function solveCircuit({ sources, branches, drive }: Circuit): Potentials {
+export function solveCircuit(circuit: Circuit): Potentials {
+  return solvePorts(circuit, []).open;
+}
+
+/** With nothing attached, and what one ampere into each port does with the sources at rest (so, ohms). */
+export type Ports = { open: Potentials; driven: Partial<Record<CircuitNode, Potentials>> };
+
+/** As `solveCircuit`, with one factorization for the open circuit and every port: what Thévenin needs. */
+export function solvePorts({ sources, branches }: Circuit, ports: readonly CircuitNode[]): Ports {
   const unknown = unknownNodes(branches, sources);
   const size = unknown.length;
   const matrix = Matrix.zeros(2 * size, 2 * size);
-  const right = Matrix.zeros(2 * size, 1);
+  const right = Matrix.zeros(2 * size, 1 + ports.length);
   const row = new Map(unknown.map((node, index) => [node, index]));
-
-  for (const branch of branches) {
-    const admittance = admittanceOf(branch);
-    for (const [here, there] of [
-      [branch.a, branch.b],
-      [branch.b, branch.a],
-    ] as const) {
-      const i = row.get(here);
-      if (i === undefined) continue;
-      addAdmittance(matrix, size, i, i, admittance, 1);
-      const j = row.get(there);
-      if (j === undefined) addKnown(right, size, i, admittance, sources[there] ?? EARTH);
-      else addAdmittance(matrix, size, i, j, admittance, -1);
-    }
+  for (const branch of branches) stamp(branch, { matrix, right, row, sources });
+  for (const [index, port] of ports.entries()) {
+    const i = row.get(port);
+    if (i !== undefined) add(right, i, 1 + index, 1);
   }
-  addDrive(right, row, drive);
   const solution = solve(matrix, right);
-  const potentials: Potentials = { ...sources };
-  for (const [node, i] of row) potentials[node] = { re: solution.get(i, 0), im: solution.get(size + i, 0) };
-  return potentials;
+  const column = (index: number) =>
+    Object.fromEntries(
+      unknown.map((node, i) => [node, { re: solution.get(i, index), im: solution.get(size + i, index) }]),
+    );
+  return {
+    open: { ...sources, ...column(0) },
+    driven: Object.fromEntries(ports.map((port, index) => [port, column(1 + index)])),
+  };
+}
+
+type System = { matrix: Matrix; right: Matrix; row: ReadonlyMap<CircuitNode, number>; sources: Circuit['sources'] };
+
+function stamp(branch: Branch, { matrix, right, row, sources }: System): void {
+  const admittance = admittanceOf(branch);
+  const size = matrix.rows / 2;
+  for (const [here, there] of [
+    [branch.a, branch.b],
+    [branch.b, branch.a],
+  ] as const) {
+    const i = row.get(here);
+    if (i === undefined) continue;
+    addAdmittance(matrix, size, i, i, admittance, 1);
+    const j = row.get(there);
+    if (j === undefined) addKnown(right, size, i, admittance, sources[there] ?? EARTH);
+    else addAdmittance(matrix, size, i, j, admittance, -1);
+  }
 }
 
 function unknownNodes(branches: readonly Branch[], sources: Circuit['sources']): CircuitNode[] {
@@ -86,13 +104,6 @@ function addAdmittance(matrix: Matrix, size: number, i: number, j: number, { re,
 function addKnown(right: Matrix, size: number, i: number, admittance: Phasor, volts: Phasor): void {
   add(right, i, 0, admittance.re * volts.re - admittance.im * volts.im);
   add(right, size + i, 0, admittance.re * volts.im + admittance.im * volts.re);
-}
-
-function addDrive(right: Matrix, row: Map<CircuitNode, number>, drive: Circuit['drive']): void {
-  const into = drive && row.get(drive.into);
-  const outOf = drive && row.get(drive.outOf);
-  if (into !== undefined) add(right, into, 0, 1);
-  if (outOf !== undefined) add(right, outOf, 0, -1);
 }
 
 function add(matrix: Matrix, i: number, j: number, value: number): void {

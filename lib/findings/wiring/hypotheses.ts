@@ -10,8 +10,8 @@ import { ohmsOf, type Wiring } from './wiring';
 export type Family = readonly Wiring[];
 
 const STRAYS: readonly Wiring['stray'][] = [
-  { toEarth: 12e-9 },
-  { toEarth: 4e-9 },
+  { toEarth: 6e-9 },
+  { toEarth: 3e-9 },
   { toEarth: 1e-9 },
   undefined,
   { toLive: 1e-9 },
@@ -46,12 +46,14 @@ function highResistance(slot: 'H' | 'N'): Family[] {
 function sharedNeutral(seriesOhms: number): Family {
   const at = (share: number): Wiring => ({
     ties: { H: 'L1', G: 'P' },
+    removable: true,
     loads: [
       { a: 'H', b: 'N', ohms: share * seriesOhms },
       { a: 'L2', b: 'N', ohms: (1 - share) * seriesOhms },
     ],
   });
   const nothingHere: Wiring = { ties: { H: 'L1', G: 'P' }, loads: [{ a: 'L2', b: 'N', ohms: 0.04 * seriesOhms }] };
+  // The other circuit's loads stay on whatever is unplugged here.
   return [...SHARES.map(at), nothingHere];
 }
 

@@ -1,12 +1,22 @@
 import type { Meter, Supply } from '../vocabulary';
-import { solveCircuit, voltsBetween, type Branch, type Circuit, type CircuitNode, type Potentials } from './circuit';
+import {
+  solveCircuit,
+  solvePorts,
+  voltsBetween,
+  type Branch,
+  type Circuit,
+  type CircuitNode,
+  type Phasor,
+  type Ports,
+  type Potentials,
+} from './circuit';
 import { circuitOf, NOMINAL_VOLTS, type SlotNode, type Wiring } from './wiring';
 
 /** Hot–neutral, hot–ground, neutral–ground; V rms. */
 export type Trio = readonly [number, number, number];
 export type LoadPrediction = { noLoad: Trio; loaded: Trio };
 
-export const PAIRS = [
+const PAIRS = [
   ['H', 'N'],
   ['H', 'G'],
   ['N', 'G'],
@@ -19,12 +29,11 @@ export const STRIKE_VOLTS = 75;
 export const STRIKE_BAND_VOLTS = 8;
 const LOAD_LENGTHS = [1, 4.5] as const;
 
-/** A wiring with what each instrument would read on it. Each is solved once, when first asked for. */
+/** A wiring with what each instrument would read on it. Each is worked out once, when first asked for. */
 export class Variant {
+  #ports?: Ports;
   #lamps?: Trio;
   #meters: Partial<Record<Meter, Trio>> = {};
-  #potentials?: Record<SlotNode, number>;
-  #groundOhms?: number;
   #loads = new Map<number, readonly LoadPrediction[]>();
 
   constructor(
@@ -34,41 +43,28 @@ export class Variant {
 
   /** V rms over each lamp with all three plugged in. */
   get lampVolts(): Trio {
-    this.#lamps ??= trioOf(withBranches(this.#circuit(), lampBranches()));
+    this.#lamps ??= trioOf(solveCircuit(withBranches(this.#circuit(), lampBranches())));
     return this.#lamps;
   }
 
   /** V rms that a meter shows, one pair at a time. */
   meterVolts(meter: Meter): Trio {
-    const known = this.#meters[meter];
-    if (known) return known;
-    const read = PAIRS.map(([a, b]) =>
-      voltsBetween(withBranches(this.#circuit(), [{ a, b, ohms: METER_OHMS[meter] }]), a, b),
-    );
-    const trio: Trio = [read[0] ?? 0, read[1] ?? 0, read[2] ?? 0];
-    this.#meters[meter] = trio;
-    return trio;
+    const ports = this.#solved();
+    const read = (a: SlotNode, b: SlotNode) => voltsAcross(ports, a, b, METER_OHMS[meter]);
+    this.#meters[meter] ??= [read('H', 'N'), read('H', 'G'), read('N', 'G')];
+    return this.#meters[meter];
   }
 
   /** V rms of each slot against earth with nothing in the slots: what a non-contact sensor feels. */
   get slotPotentials(): Record<SlotNode, number> {
-    if (!this.#potentials) {
-      const solved = solveCircuit(this.#circuit());
-      const against = (slot: SlotNode) => voltsBetween(solved, slot, 'E');
-      this.#potentials = { H: against('H'), N: against('N'), G: against('G') };
-    }
-    return this.#potentials;
+    const against = (slot: SlotNode) => voltsBetween(this.#solved().open, slot, 'E');
+    return { H: against('H'), N: against('N'), G: against('G') };
   }
 
   /** Impedance in ohms from the ground slot to the bar of the panel, sources at rest. */
   get groundOhms(): number {
-    if (this.#groundOhms === undefined) {
-      const { branches } = this.#circuit();
-      const rest = { re: 0, im: 0 };
-      const solved = solveCircuit({ sources: { L1: rest, L2: rest }, branches, drive: { into: 'G', outOf: 'P' } });
-      this.#groundOhms = voltsBetween(solved, 'G', 'P');
-    }
-    return this.#groundOhms;
+    const { re, im } = impedance(this.#solved(), 'G', 'P');
+    return Math.hypot(re, im);
   }
 
   /** Before and under a plug-in load of so many amperes at 120 V, on a short and on a long cable. */
@@ -80,11 +76,16 @@ export class Variant {
       const circuit = this.#circuit(lengths);
       return {
         noLoad: trioOf(solveCircuit(circuit)),
-        loaded: trioOf(withBranches(circuit, [{ a: 'H', b: 'N', ohms }])),
+        loaded: trioOf(solveCircuit(withBranches(circuit, [{ a: 'H', b: 'N', ohms }]))),
       };
     });
     this.#loads.set(amps, predictions);
     return predictions;
+  }
+
+  #solved(): Ports {
+    this.#ports ??= solvePorts(this.#circuit(), ['H', 'N', 'G', 'P']);
+    return this.#ports;
   }
 
   #circuit(lengths?: number): Circuit {
@@ -92,12 +93,24 @@ export class Variant {
   }
 }
 
+/** Thévenin: the open voltage, divided between the source's own impedance and the instrument. */
+function voltsAcross(ports: Ports, a: SlotNode, b: SlotNode, ohms: number): number {
+  const { re, im } = impedance(ports, a, b);
+  return (voltsBetween(ports.open, a, b) * ohms) / Math.hypot(ohms + re, im);
+}
+
+function impedance({ driven }: Ports, a: CircuitNode, b: CircuitNode): Phasor {
+  const at = (node: CircuitNode, port: CircuitNode) => driven[port]?.[node] ?? { re: 0, im: 0 };
+  const part = (key: keyof Phasor) => at(a, a)[key] + at(b, b)[key] - at(a, b)[key] - at(b, a)[key];
+  return { re: part('re'), im: part('im') };
+}
+
 function lampBranches(): Branch[] {
   return PAIRS.map(([a, b]) => ({ a, b, ohms: LAMP_OHMS }));
 }
 
-function withBranches(circuit: Circuit, more: readonly Branch[]): Potentials {
-  return solveCircuit({ ...circuit, branches: [...circuit.branches, ...more] });
+function withBranches(circuit: Circuit, more: readonly Branch[]): Circuit {
+  return { ...circuit, branches: [...circuit.branches, ...more] };
 }
 
 function trioOf(potentials: Potentials): Trio {

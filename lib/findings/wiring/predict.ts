@@ -1,109 +1,129 @@
 import type { LampPattern } from '../facts';
+import { lampsInWords } from '../evidence';
 import type { Lamp, Meter, Supply, WiringCondition } from '../vocabulary';
-import { againstEarth, between, solveCircuit, type Circuit, type Instrument, type Slot } from './circuit';
-import { HYPOTHESES, HYPOTHESES_240, type Variant } from './hypotheses';
+import type { Slots } from './fit';
+import { hypothesesFor, type Hypothesis } from './hypotheses';
+import { STRIKE_VOLTS, Variant, type Trio } from './instruments';
+import { ohmsOf, type Wiring } from './wiring';
 
-/** Between hot and neutral, hot and ground, neutral and ground. */
-export type Trio = [hn: number, hg: number, ng: number];
-export const PAIRS: readonly [Slot, Slot][] = [
-  ['H', 'N'],
-  ['H', 'G'],
-  ['N', 'G'],
-];
-
-/** A lamp lights at about this, V rms (strike voltage of the model). */
-export const STRIKE_VOLTS = 75;
-const LAMP_OHMS = 100_000;
-const METER_OHMS: Record<Meter, number> = { 'high-impedance': 10_000_000, 'low-impedance': 3_000 };
-/** A sensor answers above about this against earth, V rms. */
-export const SENSOR_VOLTS = 40;
-const TEST_LOAD_OHMS = 10;
-
-export type Prediction = {
-  condition: WiringCondition;
-  variant: Variant;
-  lampVolts: Trio;
-  highImpedance: Trio;
-  lowImpedance: Trio;
-  /** True where only the cable's capacitance makes the high-impedance reading. */
-  phantom: [boolean, boolean, boolean];
-  /** Against earth with nothing plugged in, V rms, and whether a wire drives it. */
-  slots: Record<Slot, { volts: number; driven: boolean }>;
-  /** Hot to neutral and neutral to ground under a 12 A load, V rms. */
-  loaded: { hn: number; ng: number };
+export type ReadingOptions = {
+  nominalVolts?: 120 | 240;
+  supply?: Supply;
+  /** Watts at 120 V of what is connected here. */
+  loadWatts?: number;
+  /** Watts at 120 V on the other leg of a shared neutral. */
+  otherLegWatts?: number;
+  /** The bad joint of a high-resistance condition, in ohms. */
+  jointOhms?: number;
+  /** From hot to an open ground that a fault energizes, in ohms. */
+  leakOhms?: number;
+  /** What the two legs of the house draw in watts where the service neutral is open. */
+  legWatts?: readonly [number, number];
 };
 
-let known: { at120: Prediction[]; at240: Prediction[] } | undefined;
+export type ExpectedReadings = {
+  lamps: LampPattern;
+  highImpedance: [number, number, number];
+  lowImpedance: [number, number, number];
+};
 
-/** Every variant of every condition, solved once. */
-export function predictions(nominal: 120 | 240): Prediction[] {
-  known ??= { at120: predictAll(HYPOTHESES), at240: predictAll(HYPOTHESES_240) };
-  return nominal === 240 ? known.at240 : known.at120;
-}
-
-function predictAll(hypotheses: Partial<Record<WiringCondition, Variant[]>>): Prediction[] {
-  return Object.entries(hypotheses).flatMap(([condition, variants]) =>
-    variants.map((variant) => predict(condition as WiringCondition, variant)),
-  );
-}
-
-function predict(condition: WiringCondition, variant: Variant): Prediction {
-  const { circuit } = variant;
-  const lamps = solveCircuit(
-    circuit,
-    PAIRS.map((pair) => ({ between: pair, ohms: LAMP_OHMS })),
-  );
-  const idle = solveCircuit(circuit, []);
-  const bare = solveCircuit(circuit, [], false);
-  const underLoad = solveCircuit(circuit, [{ between: ['H', 'N'], ohms: TEST_LOAD_OHMS }]);
-  const highImpedance = meterTrio(circuit, 'high-impedance');
-  const withoutCable = meterTrio(circuit, 'high-impedance', false);
-  const slotOf = (slot: Slot) => ({ volts: againstEarth(idle, slot), driven: againstEarth(bare, slot) > SENSOR_VOLTS });
+/**
+ * What lamps and both meters show on a condition, V rms at a 120 V supply, from the circuit model: 15 m of 12 AWG flat
+ * cable, 200 kilohm lamps that strike at 75 V, 10 megohm and 3 kilohm meters, one pair at a time. Options set what is
+ * not known of a real one; without them the loads, joint and leak are those of facts.md section 3. Throws where a
+ * receptacle of that voltage cannot have the condition.
+ */
+export function expectedReadings(condition: WiringCondition, options: ReadingOptions = {}): ExpectedReadings {
+  const variant = variantFor(condition, options);
   return {
-    condition,
-    variant,
-    lampVolts: trio((a, b) => between(lamps, a, b)),
-    highImpedance,
-    lowImpedance: meterTrio(circuit, 'low-impedance'),
-    phantom: [0, 1, 2].map(
-      (i) => Math.abs((highImpedance[i] ?? 0) - (withoutCable[i] ?? 0)) > 5,
-    ) as Prediction['phantom'],
-    slots: { H: slotOf('H'), N: slotOf('N'), G: slotOf('G') },
-    loaded: { hn: between(underLoad, 'H', 'N'), ng: between(underLoad, 'N', 'G') },
+    lamps: lampsOf(variant),
+    highImpedance: [...variant.meterVolts('high-impedance')],
+    lowImpedance: [...variant.meterVolts('low-impedance')],
   };
 }
 
-/** One pair at a time, the other slots empty. */
-function meterTrio(circuit: Circuit, meter: Meter, withCable = true): Trio {
-  return trio((a, b) => {
-    const instrument: Instrument = [{ between: [a, b], ohms: METER_OHMS[meter] }];
-    return between(solveCircuit(circuit, instrument, withCable), a, b);
-  });
+/** The single variant that `expectedReadings` speaks of. */
+export function variantFor(condition: WiringCondition, options: ReadingOptions = {}): Variant {
+  const { nominalVolts = 120, supply = '120/240' } = options;
+  const wiring = typicalWiring(condition, options);
+  if (wiring && nominalVolts === 120) return new Variant(wiring, supply);
+  const hypothesis = hypothesesFor(nominalVolts, supply).find((row) => row.condition === condition);
+  const variant = hypothesis && nominalOf(hypothesis);
+  if (!variant) throw new RangeError(`a ${nominalVolts} volt receptacle cannot have ${condition}`);
+  return variant;
 }
 
-function trio(read: (a: Slot, b: Slot) => number): Trio {
-  return PAIRS.map(([a, b]) => read(a, b)) as Trio;
+const GOOD: Wiring['ties'] = { H: 'L1', N: 'P', G: 'P' };
+
+/** Conditions whose readings depend on a size. */
+function typicalWiring(condition: WiringCondition, options: ReadingOptions): Wiring | undefined {
+  const { loadWatts = 100, otherLegWatts = 200, jointOhms, leakOhms = 20_000, legWatts = [1000, 2350] } = options;
+  const atNeutral = { a: 'H', b: 'N', ohms: ohmsOf(loadWatts) } as const;
+  const heater = { a: 'H', b: 'N', ohms: ohmsOf(options.loadWatts ?? 1500) } as const;
+  switch (condition) {
+    case 'open-neutral-with-load':
+      return { ties: { H: 'L1', G: 'P' }, loads: [atNeutral] };
+    case 'bootleg-ground-open-neutral':
+      return { ties: { H: 'L1' }, jumper: true, loads: [atNeutral] };
+    case 'shared-neutral-open':
+      return {
+        ties: { H: 'L1', G: 'P' },
+        loads: [atNeutral, { a: 'L2', b: 'N', ohms: ohmsOf(otherLegWatts) }],
+      };
+    case 'service-neutral-open':
+      return { ties: GOOD, legWatts };
+    case 'high-resistance-neutral':
+      return { ties: GOOD, joints: { N: jointOhms ?? 5 }, loads: [heater] };
+    case 'high-resistance-hot':
+      return { ties: GOOD, joints: { H: jointOhms ?? 5 }, loads: [heater] };
+    case 'high-resistance-ground':
+      return { ties: GOOD, joints: { G: jointOhms ?? 25 } };
+    case 'open-ground-energized':
+      return { ties: { H: 'L1', N: 'P' }, loads: [{ a: 'H', b: 'G', ohms: leakOhms }] };
+    default:
+      return undefined;
+  }
 }
 
-export function lampsOf(volts: Trio): LampPattern {
-  const [hn, hg, ng] = volts.map((one): Lamp => (one >= STRIKE_VOLTS ? 'lit' : 'off'));
+/** The variant of the plain cable, without other coupling; else the first. */
+function nominalOf({ families }: Hypothesis, loadsOff = false): Variant | undefined {
+  const standing = families.flat().filter((variant) => !(loadsOff && variant.wiring.removable));
+  return standing.find((variant) => !variant.wiring.stray) ?? standing[0] ?? families[0]?.[0];
+}
+
+function lampsOf(variant: Variant): LampPattern {
+  const [hn, hg, ng] = variant.lampVolts.map((volts): Lamp => (volts >= STRIKE_VOLTS ? 'lit' : 'off'));
   return { hn: hn ?? 'off', hg: hg ?? 'off', ng: ng ?? 'off' };
 }
 
-/**
- * What a condition shows, from the circuit model: the three lamps, and a meter of 10 megohms and of 3 kilohms one pair at
- * a time, V rms [hn, hg, ng], with 15 m of flat cable and 120 V. `supply` chooses 120/240 (default) or 208Y/120;
- * `variant` one of the condition's examples. Throws where there is no such example.
- */
-export function expectedReadings(
-  condition: WiringCondition,
-  opts: { supply?: Supply; variant?: number } = {},
-): { lamps: LampPattern; highImpedance: Trio; lowImpedance: Trio } {
-  const fitting = predictions(120).filter(
-    ({ condition: other, variant }) =>
-      other === condition && (variant.only === undefined || variant.only === (opts.supply ?? '120/240')),
-  );
-  const found = fitting[opts.variant ?? 0];
-  if (!found) throw new RangeError(`no such example of ${condition}`);
-  return { lamps: lampsOf(found.lampVolts), highImpedance: found.highImpedance, lowImpedance: found.lowImpedance };
+const typical = new Map<WiringCondition, Variant>();
+
+function typicalOf(hypothesis: Hypothesis, loadsOff: boolean): Variant | undefined {
+  const nominal = nominalOf(hypothesis, loadsOff);
+  const wiring = typicalWiring(hypothesis.condition, {});
+  // A 240 V receptacle, or a circuit without loads, has no typical load.
+  if (!wiring || loadsOff || !nominal || nominal.wiring.ties.N === 'L2') return nominal;
+  const known = typical.get(hypothesis.condition) ?? new Variant(wiring, '120/240');
+  typical.set(hypothesis.condition, known);
+  return known;
+}
+
+/** In words, for the reason why a condition is ruled out. */
+export function predictedLamps(hypothesis: Hypothesis, loadsOff: boolean, slots: Slots): string {
+  const variant = typicalOf(hypothesis, loadsOff);
+  if (!variant) return 'nothing';
+  const lamps = lampsOf(variant);
+  return slots === 2 ? `the lamp between the slots ${lamps.hn}` : lampsInWords(lamps);
+}
+
+/** "about 120, 62 and 57 volts" in the order hot–neutral, hot–ground, neutral–ground. */
+export function predictedVolts(hypothesis: Hypothesis, meter: Meter, loadsOff: boolean, slots: Slots): string {
+  const variant = typicalOf(hypothesis, loadsOff);
+  if (!variant) return 'nothing';
+  const [hn, hg, ng] = roundTrio(variant.meterVolts(meter));
+  return slots === 2 ? `about ${hn} volts` : `about ${hn}, ${hg} and ${ng} volts`;
+}
+
+function roundTrio(trio: Trio): Trio {
+  return [Math.round(trio[0]), Math.round(trio[1]), Math.round(trio[2])];
 }

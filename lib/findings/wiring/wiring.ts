@@ -14,7 +14,7 @@ export type Wiring = {
   jumper?: boolean;
   /** Loads of the circuit, as seen from the receptacle. */
   loads?: readonly { a: CircuitNode; b: CircuitNode; ohms: number }[];
-  /** The loads are the circuit's own, so that unplugging and switching off takes them away. */
+  /** Its load between hot and neutral is the circuit's own, so that unplugging and switching off takes it away. */
   removable?: boolean;
   /** The service neutral has failed: what the two legs of the house draw against the bar, in watts. */
   legWatts?: readonly [number, number];

@@ -1,0 +1,163 @@
+import type { ContactSensor, LampPattern, LoadTest, VoltTrio, WiringEvidence } from '../facts';
+import { assessLoadTest } from '../supply/load-test';
+import type { Meter, WiringCondition } from '../vocabulary';
+import { groundOhmsFit, hasMeter, lampsFit, loadsAreOff, loadTestFits, sensorFits, someVariant, trioFits } from './fit';
+import type { Hypothesis } from './hypotheses';
+import { STRIKE_VOLTS, Variant } from './instruments';
+
+/** In the order of the inspector's own safety; those that share a number ask for nothing at the slots. */
+export const CHECK_KINDS = [
+  'sensor',
+  'power',
+  'unplug',
+  'high-impedance',
+  'low-impedance-neutral',
+  'low-impedance-all',
+  'load-test',
+  'ground-ohms',
+] as const;
+export type CheckKind = (typeof CHECK_KINDS)[number];
+
+/** What the model says a check would show on one variant: a label, equal where the answers could not be told apart. */
+export type Outcome = string;
+
+const SENSOR_TYPICAL_VOLTS = 55;
+const TEST_AMPS = 12;
+
+/** Whether the check could still bring something that the evidence does not hold. */
+export function isOpen(kind: CheckKind, evidence: WiringEvidence): boolean {
+  const { lamps, loadTest, groundOhms, powerChecked, slots } = evidence;
+  switch (kind) {
+    case 'sensor':
+      return !sensorIsDone(evidence);
+    case 'power':
+      return powerChecked !== true;
+    case 'unplug':
+      return lamps !== undefined && !loadsAreOff(evidence);
+    case 'high-impedance':
+      return !hasMeter(evidence, 'high-impedance');
+    case 'low-impedance-neutral':
+      return slots === 3 && !hasMeter(evidence, 'low-impedance');
+    case 'low-impedance-all':
+      return !hasMeter(evidence, 'low-impedance');
+    case 'load-test':
+      return loadTest === undefined;
+    case 'ground-ohms':
+      return slots === 3 && groundOhms === undefined;
+  }
+}
+
+function sensorIsDone({ sensor, slots }: WiringEvidence): boolean {
+  if (!sensor || sensor.hotSlot === undefined) return false;
+  if (slots === 2) return sensor.neutralSlot !== undefined;
+  if (sensor.groundSlot === undefined) return sensor.coverScrew === true;
+  // Both slots answer: the screw, which is farther off, decides.
+  return !(sensor.groundSlot && sensor.hotSlot) || sensor.coverScrew !== undefined;
+}
+
+/**
+ * What a check would show on a variant, as the set of conditions that its answer leaves standing. So a check tells two
+ * conditions apart exactly where `diagnoseWiring` would.
+ */
+export function outcomeOf(
+  kind: CheckKind,
+  variant: Variant,
+  condition: WiringCondition,
+  hypotheses: readonly Hypothesis[],
+  evidence: WiringEvidence,
+): Outcome {
+  const { slots } = evidence;
+  const off = loadsAreOff(evidence);
+  switch (kind) {
+    case 'sensor': {
+      const sensor = sensorOn(variant);
+      return standing(hypotheses, off, (other) => sensorFits(other, sensor, slots));
+    }
+    case 'power':
+      return condition === 'no-power' ? 'off' : 'on';
+    case 'unplug': {
+      const lamps = lampsOn(unloaded(variant));
+      return standing(hypotheses, true, (other) => lampsFit(other, lamps, slots));
+    }
+    case 'high-impedance':
+      return trioOutcome('high-impedance', variant, hypotheses, evidence);
+    case 'low-impedance-neutral':
+      return `neutral to ground ${Math.round((variant.meterVolts('low-impedance')[2] ?? 0) / 40)}`;
+    case 'low-impedance-all':
+      return trioOutcome('low-impedance', variant, hypotheses, evidence);
+    case 'load-test':
+      return loadOutcome(variant, hypotheses, evidence);
+    case 'ground-ohms': {
+      const ohms = variant.groundOhms;
+      return hypotheses
+        .filter((hypothesis) =>
+          someVariant(hypothesis, off, (other) => groundOhmsFit(other, ohms, hypothesis.condition)),
+        )
+        .map((hypothesis) => hypothesis.condition)
+        .join();
+    }
+  }
+}
+
+function standing(hypotheses: readonly Hypothesis[], off: boolean, fits: (variant: Variant) => boolean): Outcome {
+  return hypotheses
+    .filter((hypothesis) => someVariant(hypothesis, off, fits))
+    .map((hypothesis) => hypothesis.condition)
+    .join();
+}
+
+function trioOutcome(
+  meter: Meter,
+  variant: Variant,
+  hypotheses: readonly Hypothesis[],
+  evidence: WiringEvidence,
+): Outcome {
+  const [hn, hg, ng] = variant.meterVolts(meter);
+  const trio: VoltTrio = { hn, hg, ng, meter };
+  const off = loadsAreOff(evidence);
+  return hypotheses
+    .filter((hypothesis) => trioFits(hypothesis, trio, evidence.slots, off))
+    .map((hypothesis) => hypothesis.condition)
+    .join();
+}
+
+/** The false-ground rule only moves the suspicion, so its answer counts beside what the drop excludes. */
+function loadOutcome(variant: Variant, hypotheses: readonly Hypothesis[], evidence: WiringEvidence): Outcome {
+  // A long cable: on a short one the load moves too little to judge the ground.
+  const long = variant.loadVolts(TEST_AMPS).at(-1);
+  if (!long || long.noLoad[0] < 1) return 'no voltage to load';
+  const test: LoadTest = {
+    amps: TEST_AMPS,
+    noLoadHn: long.noLoad[0],
+    loadedHn: long.loaded[0],
+    noLoadNg: long.noLoad[2],
+    loadedNg: long.loaded[2],
+  };
+  const { nearBondedPanel, sharedNeutral } = evidence;
+  const { ground } = assessLoadTest(test, { nearBondedPanel, sharedNeutral });
+  const left = standing(hypotheses, loadsAreOff(evidence), (other) => loadTestFits(other, test));
+  return `${left} ${ground}`;
+}
+
+function sensorOn(variant: Variant): ContactSensor {
+  const { H, N, G } = variant.slotPotentials;
+  const answers = (volts: number) => volts >= SENSOR_TYPICAL_VOLTS;
+  return { hotSlot: answers(H), neutralSlot: answers(N), groundSlot: answers(G), coverScrew: answers(G) };
+}
+
+function lampsOn(variant: Variant): LampPattern {
+  const lamp = (volts: number) => (volts >= STRIKE_VOLTS ? 'lit' : 'off');
+  const [hn, hg, ng] = variant.lampVolts;
+  return { hn: lamp(hn), hg: lamp(hg), ng: lamp(ng) };
+}
+
+const withoutLoads = new WeakMap<Variant, Variant>();
+
+function unloaded(variant: Variant): Variant {
+  if (!variant.wiring.removable) return variant;
+  // Only what hangs between hot and neutral is the circuit's own; a leak or another circuit's load stays.
+  const loads = variant.wiring.loads?.filter((load) => !(load.a === 'H' && load.b === 'N'));
+  const known = withoutLoads.get(variant) ?? new Variant({ ...variant.wiring, loads }, variant.supply);
+  withoutLoads.set(variant, known);
+  return known;
+}
