@@ -63,11 +63,12 @@ export async function cancelInspection(
   });
 }
 
-/** Takes up a cancelled inspection again. Owner and office only. */
+/** Takes up a cancelled inspection again, or opens a closed one, which stays released. Owner and office only. */
 export async function reopenInspection(actor: MemberActor, inspectionId: string): Promise<BookingChangeOutcome> {
   return asOffice(actor, inspectionId, async (tx, inspection) => {
-    if (inspection.state !== 'cancelled') return { kind: 'changed' };
-    return changed(tx, inspection, 'inspection.reopened', { state: 'booked' });
+    if (inspection.state !== 'cancelled' && inspection.state !== 'closed') return { kind: 'changed' };
+    const state = inspection.state === 'closed' ? 'released' : 'booked';
+    return changed(tx, inspection, 'inspection.reopened', { state }, { was: inspection.state });
   });
 }
 

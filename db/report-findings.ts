@@ -1,8 +1,11 @@
 import 'server-only';
-import { composeFinding } from '@/lib/findings';
-import type { ComposedFinding, Finding } from '@/lib/findings/facts';
+import { composeFinding, evaluateInspection } from '@/lib/findings';
+import type { ComposedFinding, Finding, Gap } from '@/lib/findings/facts';
 import { SIGNALS, URGENCIES, type Signal, type Urgency } from '@/lib/findings/vocabulary';
+import { inspectionFacts } from '@/lib/schemas/inspection-facts';
 import type { WalkDecision } from '@/lib/schemas/walk';
+import type { MemberActor } from './actor';
+import { loadWalk } from './inspections';
 import type { ReportSources } from './report-sources';
 
 export type DecisionStanding = 'undecided' | 'changed' | 'kept' | 'dismissed';
@@ -62,4 +65,26 @@ function graver(derived: Signal, raised: Signal | undefined): Signal {
 function sooner(urgency: Urgency, signal: Signal): Urgency {
   const least = ({ DANGER: 'U1', WARNING: 'U2', CAUTION: 'U3', NOTICE: 'note' } as const)[signal];
   return URGENCIES.indexOf(least) < URGENCIES.indexOf(urgency) ? least : urgency;
+}
+
+export type FindingPhoto = { id: string; caption: string };
+
+/** The findings of an inspection with their decisions, what stays unproven, and the photos that stand; null where not visible. */
+export async function loadFindings(
+  actor: MemberActor,
+  inspectionId: string,
+): Promise<{ findings: DecidedFinding[]; gaps: Gap[]; photos: FindingPhoto[]; timeZone: string } | null> {
+  const walk = await loadWalk(actor, inspectionId);
+  if (!walk) return null;
+  const { state } = walk;
+  const evaluation = evaluateInspection(inspectionFacts(state));
+  const photos = state.photos
+    .filter((photo) => !photo.deleted && photo.state === 'stored')
+    .map(({ id, caption }) => ({ id, caption }));
+  return {
+    findings: decideFindings({ evaluation, state }),
+    gaps: evaluation.gaps,
+    photos,
+    timeZone: state.inspection.timeZone,
+  };
 }

@@ -1,19 +1,11 @@
 'use client';
 
 import { useEffect, useRef, useState } from 'react';
-import { INSPECTION_STATES, type InspectionState } from '@/lib/findings/vocabulary';
+import { INSPECTION_STATES } from '@/lib/findings/vocabulary';
 import type { InspectionFilter } from '@/lib/schemas/inspection';
+import { STATE_WORDS } from './state-words';
 
 export type Inspector = { membershipId: string; name: string };
-
-export const STATE_WORDS: Record<InspectionState, string> = {
-  booked: 'Booked',
-  'on-site': 'On site',
-  'in-review': 'In review',
-  released: 'Released',
-  closed: 'Closed',
-  cancelled: 'Cancelled',
-};
 
 const WAIT_MS = 250;
 const CONTROL = 'min-h-[44px] rounded-none border-b-2 border-ink bg-transparent px-1 font-bold';

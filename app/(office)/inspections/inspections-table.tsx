@@ -6,7 +6,8 @@ import Link from 'next/link';
 import { useRouter } from 'next/navigation';
 import { useMemo, useState } from 'react';
 import type { InspectionFilter, InspectionListItem, InspectionPage, InspectionSort } from '@/lib/schemas/inspection';
-import { InspectionsFilter, STATE_WORDS, type Inspector } from './inspections-filter';
+import { InspectionsFilter, type Inspector } from './inspections-filter';
+import { STATE_WORDS } from './state-words';
 
 const features = tableFeatures({});
 const NO_ITEMS: InspectionListItem[] = [];
