@@ -82,7 +82,9 @@ export function buildWorld(facts: InspectionFacts): World {
     breakerAfci: atBreaker.flatMap((reading) => (reading.kind === 'afci' ? afciResult(reading) : [])),
     stillOff: stillOffPoints(facts),
   };
-  for (const point of points) point.protection = protectionOf(point, world);
+  const trials = [...points.flatMap((point) => point.gfci), ...world.breakerGfci];
+  const proofs = trials.filter(({ assessment, trial }) => assessment.protects === 'yes' && trial.button === 'trips');
+  for (const point of points) point.protection = protectionOf(point, world, proofs);
   return world;
 }
 
@@ -189,11 +191,11 @@ function afciResult(reading: Extract<ReadingFacts, { kind: 'afci' }>): AfciResul
 }
 
 /** Own trials first; then devices whose button put this point out. The newest trial of a device counts. */
-function protectionOf(point: Point, world: World): Protection {
+function protectionOf(point: Point, world: World, proofs: GfciResult[]): Protection {
   const bits = point.evidence.variants[0]?.lamps && bitsOf(point.evidence.variants[0].lamps);
   const cannotJudge = bits !== undefined && ['001', '010', '011', '111'].includes(bits);
   const own = point.gfci.at(-1);
-  const upstream = cannotJudge ? undefined : provenUpstream(point, world);
+  const upstream = cannotJudge ? undefined : provenUpstream(point, world, proofs);
   if (own?.assessment.protects === 'yes' && !cannotJudge)
     return {
       state: 'yes',
@@ -209,13 +211,10 @@ function protectionOf(point: Point, world: World): Protection {
   return { state: 'unknown', readingIds: [], by: '' };
 }
 
-function provenUpstream(point: Point, world: World): Protection | undefined {
-  const others = world.points.filter((other) => other !== point).flatMap((other) => other.gfci);
-  const proof = [...others, ...world.breakerGfci].find(
-    (result) =>
-      result.assessment.protects === 'yes' &&
-      result.trial.button === 'trips' &&
-      result.reading.evidence.wentDead?.includes(point.receptacle.id),
+function provenUpstream(point: Point, world: World, proofs: GfciResult[]): Protection | undefined {
+  const proof = proofs.find(
+    ({ reading }) =>
+      reading.receptacleId !== point.receptacle.id && reading.evidence.wentDead?.includes(point.receptacle.id),
   );
   if (!proof) return undefined;
   const device = proof.reading.receptacleId ? world.byId.get(proof.reading.receptacleId)?.place : undefined;

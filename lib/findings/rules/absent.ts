@@ -1,8 +1,8 @@
-import type { Point, World } from '../points';
+import type { AfciResult, Point, World } from '../points';
 import type { Asked } from '../protection/asked';
 import { stateProfile } from '../states/all';
 import type { PlaceKind } from '../vocabulary';
-import { askedHere, CURRENT_PRACTICE_EDITION, houseEditions, placesOf } from './asked-here';
+import { askedHere, CURRENT_PRACTICE_EDITION, firstAsked, houseEditions, placesOf } from './asked-here';
 import type { RawFinding, Rule } from './rule';
 
 type Row = { code: string; noun: string };
@@ -62,13 +62,12 @@ function absent(world: World, point: Point, row: Row & { asked: Asked }, count: 
     readingIds: [...new Set([...point.protection.readingIds, ...point.evidence.readingIds])],
     values: {
       asked_when_built: askedWhenBuilt(world, point, 'gfci'),
-      since: row.asked.since ?? '',
       state_note: stateProfile(world.facts.inspection.stateProfile).absentProtection.sentence,
       device_found: point.gfci.at(-1)?.trial.deviceFound === false ? 'no' : 'unknown',
     },
     outOf: { count, noun: row.noun },
     drawing: drawingOf(point),
-    ...sinceHook(row.asked),
+    ...sinceHook(point, 'gfci', row.asked),
   };
 }
 
@@ -83,8 +82,9 @@ function drawingOf(point: Point): RawFinding['drawing'] {
 }
 
 /** The section stands in the catalogue row; the year comes from the place. */
-function sinceHook(asked: Asked): Pick<RawFinding, 'hook'> {
-  return asked.since === undefined ? {} : { hook: { section: '', since: asked.since, confidence: asked.confidence } };
+function sinceHook(point: Point, what: 'gfci' | 'afci', { confidence }: Asked): Pick<RawFinding, 'hook'> {
+  const since = firstAsked(point, what);
+  return since === undefined ? {} : { hook: { section: '', since, confidence } };
 }
 
 export function askedWhenBuilt(world: World, point: Point, what: 'gfci' | 'afci'): 'yes' | 'no' | 'unknown' {
@@ -109,14 +109,14 @@ function sumpPumps(world: World): RawFinding[] {
 export function pointsAskingAfci(
   world: World,
 ): { point: Point; state: 'shown' | 'absent' | 'unknown'; asked: Asked }[] {
+  const trials = [...world.points.flatMap((point) => point.afci), ...world.breakerAfci];
   return world.points.flatMap((point) => {
     const asked = askedHere(point, CURRENT_PRACTICE_EDITION).afci;
-    return asked.asked === 'yes' ? [{ point, state: arcState(point, world), asked }] : [];
+    return asked.asked === 'yes' ? [{ point, state: arcState(point, trials), asked }] : [];
   });
 }
 
-function arcState(point: Point, world: World): 'shown' | 'absent' | 'unknown' {
-  const trials = [...world.points.flatMap((other) => other.afci), ...world.breakerAfci];
+function arcState(point: Point, trials: AfciResult[]): 'shown' | 'absent' | 'unknown' {
   const tried = trials.some(
     ({ reading }) =>
       reading.receptacleId === point.receptacle.id ||
@@ -148,12 +148,11 @@ function absentAfci(world: World): RawFinding[] {
       readingIds: [],
       values: {
         asked_when_built: askedWhenBuilt(world, point, 'afci'),
-        since: asked.since ?? '',
         state_note: stateProfile(world.facts.inspection.stateProfile).absentProtection.sentence,
       },
       outOf: {
         count: asking.filter((other) => other.point.area.structureId === point.area.structureId).length,
-        noun: 'receptacles in living and sleeping rooms',
+        noun: 'receptacles in rooms that call for it',
       },
       evidence: [
         {
@@ -161,6 +160,6 @@ function absentAfci(world: World): RawFinding[] {
           showed: `breaker ${point.circuit?.breaker ?? 'not recorded'}: no arc protection recorded`,
         },
       ],
-      ...sinceHook(asked),
+      ...sinceHook(point, 'afci', asked),
     }));
 }

@@ -2,7 +2,7 @@ import type { InspectionFacts } from '../facts';
 import type { Point } from '../points';
 import { protectionAsked } from '../protection/asked';
 import { editionInForce } from '../protection/edition-in-force';
-import type { PlaceKind } from '../vocabulary';
+import { NEC_EDITIONS, type PlaceKind } from '../vocabulary';
 import { nominalVoltsOf } from '../evidence';
 
 /**
@@ -19,7 +19,19 @@ export function houseEditions(facts: InspectionFacts): number[] {
 }
 
 /** What an edition asks at this point. Distances in feet; what was not measured is not passed. */
-export function askedHere(point: Point, edition: number): ReturnType<typeof protectionAsked> {
+export function askedHere(point: Point, edition: number): AskedAnswers {
+  const known = answers.get(point) ?? new Map<number, AskedAnswers>();
+  answers.set(point, known);
+  const answer = known.get(edition) ?? ask(point, edition);
+  known.set(edition, answer);
+  return answer;
+}
+
+type AskedAnswers = ReturnType<typeof protectionAsked>;
+/** Several rules ask the same of a point; it is worked out once per point and edition. */
+const answers = new WeakMap<Point, Map<number, AskedAnswers>>();
+
+function ask(point: Point, edition: number): AskedAnswers {
   const { receptacle, area, circuit } = point;
   return protectionAsked({
     place: placesOf(point),
@@ -36,6 +48,11 @@ export function askedHere(point: Point, edition: number): ReturnType<typeof prot
     ...given('poolFt', receptacle.poolFt),
     ...given('measuredTo', receptacle.measuredTo),
   });
+}
+
+/** The earliest edition that plainly asked it at this point; absent where none did. Source: the rows of facts section 5. */
+export function firstAsked(point: Point, what: 'gfci' | 'afci'): number | undefined {
+  return NEC_EDITIONS.find((edition) => askedHere(point, edition)[what].asked === 'yes');
 }
 
 export function placesOf(point: Point): PlaceKind[] {

@@ -189,9 +189,16 @@ function wiringValues(point: Point, { evidence, diagnosis }: Read, code: string)
     also_possible: alsoPossible(possibleConditions(diagnosis)),
     next_check: diagnosis.nextCheck?.instruction ?? '',
     ground_ohms: evidence.groundOhms ?? '',
+    drop_percent: dropPercent(evidence),
     suspicion: code === 'W07' ? suspicionOf(evidence) : '',
     gfci_protected: point.protection.state === 'yes',
   };
+}
+
+/** Percent of the no-load voltage that a load test lost, or empty. */
+function dropPercent({ loadTest }: WiringEvidence): number | string {
+  if (!loadTest || loadTest.noLoadHn <= 0) return '';
+  return Number(((100 * (loadTest.noLoadHn - loadTest.loadedHn)) / loadTest.noLoadHn).toFixed(1));
 }
 
 /** Without those that have no ground behind a proven GFCI: they are told by the rows about the mark. */

@@ -34,7 +34,7 @@ export const ARC_ROWS: readonly CatalogueEntry[] = [
     evidenceNeeded: ['photo of the panel'],
     hook: { section: '210.12', since: 1999, confidence: 'high' },
     en: {
-      title: 'No AFCI protection recorded for living and sleeping rooms',
+      title: 'No AFCI protection recorded',
       observed: 'No AFCI is recorded for {{ count }} of {{ out_of }} {{ noun }}. {{ where }}.',
       means: `An AFCI cuts the power when a wire or cord sparks. Current safety practice recommends it for these rooms.${SINCE}`,
       hazardType: 'A fire-safety upgrade that is not there.',
