@@ -22,10 +22,13 @@ async function main(): Promise<void> {
     concurrency: 2,
     pollInterval: 2000,
     events,
+    // Its own handling ends the process before the heartbeat and the connections are closed.
+    noHandleSignals: true,
     logger: new Logger(() => (level, message) => {
       if (level === 'error' || level === 'warning') log.warn({ from: 'queue' }, message);
     }),
   });
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => void runner.stop());
   log.info('the worker is ready');
   await runner.promise;
   await heartbeat.stop();

@@ -16,7 +16,7 @@ export function ReportCircuits({ print }: { print: ReportPrint }) {
     <ReportPage print={print} title={messages.circuits.title}>
       <Anchor print={print} id="circuits" />
       <Text style={styles.h1}>{messages.circuits.title}</Text>
-      <Text style={styles.lead}>{snapshot.circuits.length > 0 ? messages.circuits.lead : messages.circuits.none}</Text>
+      <Text style={styles.lead}>{messages.circuits.lead}</Text>
       {snapshot.panels.map((panel) => (
         <View key={panel.id}>
           <View style={styles.section} wrap={false} minPresenceAhead={60}>

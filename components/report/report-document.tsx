@@ -44,7 +44,7 @@ export function ReportDocument({ print }: { print: ReportPrint }) {
       )}
       <ReportGaps print={print} />
       <ReportLog print={print} />
-      <ReportCircuits print={print} />
+      {snapshot.circuits.length > 0 && <ReportCircuits print={print} />}
       <ReportEnd print={print} />
     </Document>
   );

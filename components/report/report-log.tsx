@@ -3,7 +3,9 @@ import type { Lamp } from '@/lib/findings/vocabulary';
 import type { SnapshotLogRow } from '@/lib/schemas/snapshot';
 import { wordsIn, type ReportPrint } from './report-context';
 import { Anchor, ReportPage } from './report-page';
-import { TableHead } from './report-parts';
+import { otherPhotoIds } from './report-order';
+import { Section, TableHead } from './report-parts';
+import { PhotoRows } from './report-photos';
 import { INK, RULE, styles } from './report-styles';
 
 const WIDTHS = { area: 78, number: 24, place: 82, device: 58, lamps: 44, volts: 82, protection: 74, result: 84 };
@@ -16,6 +18,7 @@ export function ReportLog({ print }: { print: ReportPrint }) {
     head: messages.log[key],
     width: WIDTHS[key],
   }));
+  const others = otherPhotoIds(snapshot);
   return (
     <ReportPage print={print} title={messages.log.title}>
       <Anchor print={print} id="log" />
@@ -31,6 +34,11 @@ export function ReportLog({ print }: { print: ReportPrint }) {
         />
       ))}
       <Text style={[styles.small, { marginTop: 8 }]}>{messages.log.never}</Text>
+      {others.length > 0 && (
+        <Section title={messages.log.photos}>
+          <PhotoRows print={print} photoIds={others} />
+        </Section>
+      )}
     </ReportPage>
   );
 }

@@ -81,6 +81,6 @@ export const styles = StyleSheet.create({
   limitsInner: { borderLeftWidth: 0.75, borderLeftColor: RULE, paddingLeft: 10 },
   refer: { borderWidth: 0.75, borderColor: INK, padding: 9, marginTop: 10 },
   fact: { ...row, borderBottomWidth: 0.5, borderBottomColor: HAIRLINE, paddingVertical: 6.5 },
-  term: { width: 96, color: INK_2 },
+  term: { width: 112, paddingRight: 10, color: INK_2 },
   grow: { flex: 1 },
 });

@@ -3,10 +3,10 @@ import { dayIn } from '@/lib/messages/dates';
 import type { ReportSnapshot } from '@/lib/schemas/snapshot';
 import { Facts } from '@/components/ui/facts';
 import { coverFacts } from './report-facts';
-import { leadCounts, inFirstList } from './report-order';
+import { inFirstList, leadCounts, otherPhotoIds } from './report-order';
 import { WebCircuits, WebLog } from './web-log';
 import { WebHeading } from './web-heading';
-import { WebFinding } from './web-finding';
+import { WebFinding, WebPhotos } from './web-finding';
 import { WebFirst, WebLater } from './web-first';
 import { WebCoverage, WebGaps, WebLimits, WebNotTested, WebSignature } from './web-end';
 
@@ -23,6 +23,7 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
   const first = findings.filter(inFirstList);
   const later = findings.filter((finding) => !inFirstList(finding));
   const { now, days, rest } = leadCounts(findings);
+  const others = otherPhotoIds(snapshot);
   return (
     <article lang="en" className="mx-auto grid max-w-3xl gap-12">
       <header>
@@ -46,6 +47,12 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
       </section>
       <WebGaps snapshot={snapshot} />
       <WebLog snapshot={snapshot} />
+      {others.length > 0 && (
+        <section aria-labelledby="photos">
+          <WebHeading id="photos">{enReport.log.photos}</WebHeading>
+          <WebPhotos photoIds={others} snapshot={snapshot} photoSrc={photoSrc} />
+        </section>
+      )}
       <WebCircuits snapshot={snapshot} />
       <WebNotTested snapshot={snapshot} />
       <WebCoverage snapshot={snapshot} />

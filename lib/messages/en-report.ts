@@ -10,7 +10,8 @@ import type {
   WiringMethod,
 } from '@/lib/findings/vocabulary';
 
-const count = (n: number, one: string, many: string) => `${n} ${n === 1 ? one : many}`;
+const NUMBERS = ['No', 'One', 'Two', 'Three', 'Four', 'Five', 'Six', 'Seven', 'Eight', 'Nine', 'Ten'];
+const count = (n: number, one: string, many: string) => `${NUMBERS[n] ?? n} ${n === 1 ? one : many}`;
 
 /** What a report says outside the catalogue of findings. */
 export const enReport = {
@@ -125,7 +126,7 @@ export const enReport = {
     notTested: 'not tested',
     removed: 'removed',
     notPresent: 'not present',
-    twoSlots: 'no ground slot',
+    photos: 'Photos beside the findings',
   },
   device: {
     receptacle: '',
@@ -220,7 +221,6 @@ export const enReport = {
     fedFrom: (panel: string) => `fed from ${panel}`,
     off: 'off when we left',
     poles: 'two-pole',
-    none: 'No circuits were recorded.',
   },
   breaker: {
     none: 'none marked',

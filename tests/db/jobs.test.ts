@@ -7,7 +7,7 @@ import { Pool } from 'pg';
 import { SMTPServer } from 'smtp-server';
 import { v7 as uuidv7 } from 'uuid';
 import { afterAll, beforeAll, expect, test } from 'vitest';
-import { VISITOR, type SystemActor } from '@/db/actor';
+import { VISITOR } from '@/db/actor';
 import { listGrants, revokeGrant, sendReport } from '@/db/grants';
 import { enqueueJob } from '@/db/jobs';
 import { listParties } from '@/db/parties';
