@@ -68,7 +68,7 @@ function addressOf(inspectionId: string, { to, at }: ReviewLine): Route {
     case 'walk':
       return `/walk#${inspectionId}` as Route;
     case 'findings':
-      return `/inspections/${inspectionId}/findings${at ? `#${encodeURIComponent(at)}` : ''}` as Route;
+      return `/inspections/${inspectionId}/findings${at ? `?show=${encodeURIComponent(at)}` : ''}` as Route;
     case 'circuits':
       return `/inspections/${inspectionId}/circuits` as Route;
     case 'visit':
