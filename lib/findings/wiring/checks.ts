@@ -1,9 +1,9 @@
 import type { ContactSensor, LampPattern, LoadTest, VoltTrio, WiringEvidence } from '../facts';
 import { assessLoadTest } from '../supply/load-test';
 import type { Meter, WiringCondition } from '../vocabulary';
-import { groundOhmsFit, hasMeter, lampsFit, loadsAreOff, loadTestFits, sensorFits, someVariant, trioFits } from './fit';
-import type { Hypothesis } from './hypotheses';
+import { hasMeter, loadsAreOff } from './fit';
 import { STRIKE_VOLTS, Variant } from './instruments';
+import { piecesOf, standingUnder, type Piece } from './pieces';
 
 /** In the order of the inspector's own safety; those that share a number ask for nothing at the slots. */
 export const CHECK_KINDS = [
@@ -63,80 +63,61 @@ export function outcomeOf(
   kind: CheckKind,
   variant: Variant,
   condition: WiringCondition,
-  hypotheses: readonly Hypothesis[],
   evidence: WiringEvidence,
 ): Outcome {
-  const { slots } = evidence;
-  const off = loadsAreOff(evidence);
+  const { slots, nominalVolts, supply, loadsUnplugged, hardWiredLoadsOff } = evidence;
+  const circuit: WiringEvidence = { slots, nominalVolts, supply, loadsUnplugged, hardWiredLoadsOff };
   switch (kind) {
-    case 'sensor': {
-      const sensor = sensorOn(variant);
-      return standing(hypotheses, off, (other) => sensorFits(other, sensor, slots));
-    }
+    case 'sensor':
+      return leftBy({ ...circuit, sensor: sensorOn(variant) });
     case 'power':
       return condition === 'no-power' ? 'off' : 'on';
     case 'unplug': {
       const lamps = lampsOn(unloaded(variant));
-      return standing(hypotheses, true, (other) => lampsFit(other, lamps, slots));
+      return leftBy({ ...circuit, lamps, loadsUnplugged: 'yes', hardWiredLoadsOff: 'yes' });
     }
     case 'high-impedance':
-      return trioOutcome('high-impedance', variant, hypotheses, evidence);
+      return leftBy({ ...circuit, volts: trioOn(variant, 'high-impedance') });
     case 'low-impedance-neutral':
-      return `neutral to ground ${Math.round((variant.meterVolts('low-impedance')[2] ?? 0) / 40)}`;
+      return `neutral to ground ${Math.round(variant.meterVolts('low-impedance')[2] / 40)}`;
     case 'low-impedance-all':
-      return trioOutcome('low-impedance', variant, hypotheses, evidence);
+      return leftBy({ ...circuit, volts: trioOn(variant, 'low-impedance') });
     case 'load-test':
-      return loadOutcome(variant, hypotheses, evidence);
-    case 'ground-ohms': {
-      const ohms = variant.groundOhms;
-      return hypotheses
-        .filter((hypothesis) =>
-          someVariant(hypothesis, off, (other) => groundOhmsFit(other, ohms, hypothesis.condition)),
-        )
-        .map((hypothesis) => hypothesis.condition)
-        .join();
-    }
+      return loadOutcome(variant, circuit, evidence);
+    case 'ground-ohms':
+      return leftBy({ ...circuit, groundOhms: Number(variant.groundOhms.toPrecision(2)) });
   }
 }
 
-function standing(hypotheses: readonly Hypothesis[], off: boolean, fits: (variant: Variant) => boolean): Outcome {
-  return hypotheses
-    .filter((hypothesis) => someVariant(hypothesis, off, fits))
-    .map((hypothesis) => hypothesis.condition)
-    .join();
+function leftBy(reading: WiringEvidence): Outcome {
+  const read = piecesOf(reading).find((piece) => READINGS.includes(piece.kind));
+  return read ? [...standingUnder(read, reading)].join() : '';
 }
 
-function trioOutcome(
-  meter: Meter,
-  variant: Variant,
-  hypotheses: readonly Hypothesis[],
-  evidence: WiringEvidence,
-): Outcome {
+const READINGS: readonly Piece['kind'][] = ['sensor', 'lamps', 'volts', 'load-test', 'ground-ohms'];
+
+/** A meter reads whole volts here, so that like readings are worked out once. */
+function trioOn(variant: Variant, meter: Meter): VoltTrio {
   const [hn, hg, ng] = variant.meterVolts(meter);
-  const trio: VoltTrio = { hn, hg, ng, meter };
-  const off = loadsAreOff(evidence);
-  return hypotheses
-    .filter((hypothesis) => trioFits(hypothesis, trio, evidence.slots, off))
-    .map((hypothesis) => hypothesis.condition)
-    .join();
+  return { hn: Math.round(hn), hg: Math.round(hg), ng: Math.round(ng), meter };
 }
 
 /** The false-ground rule only moves the suspicion, so its answer counts beside what the drop excludes. */
-function loadOutcome(variant: Variant, hypotheses: readonly Hypothesis[], evidence: WiringEvidence): Outcome {
+function loadOutcome(variant: Variant, circuit: WiringEvidence, evidence: WiringEvidence): Outcome {
   // A long cable: on a short one the load moves too little to judge the ground.
   const long = variant.loadVolts(TEST_AMPS).at(-1);
   if (!long || long.noLoad[0] < 1) return 'no voltage to load';
-  const test: LoadTest = {
+  const tenths = (volts: number) => Math.round(volts * 10) / 10;
+  const loadTest: LoadTest = {
     amps: TEST_AMPS,
-    noLoadHn: long.noLoad[0],
-    loadedHn: long.loaded[0],
-    noLoadNg: long.noLoad[2],
-    loadedNg: long.loaded[2],
+    noLoadHn: tenths(long.noLoad[0]),
+    loadedHn: tenths(long.loaded[0]),
+    noLoadNg: tenths(long.noLoad[2]),
+    loadedNg: tenths(long.loaded[2]),
   };
   const { nearBondedPanel, sharedNeutral } = evidence;
-  const { ground } = assessLoadTest(test, { nearBondedPanel, sharedNeutral });
-  const left = standing(hypotheses, loadsAreOff(evidence), (other) => loadTestFits(other, test));
-  return `${left} ${ground}`;
+  const { ground } = assessLoadTest(loadTest, { nearBondedPanel, sharedNeutral });
+  return `${leftBy({ ...circuit, loadTest })} ${ground}`;
 }
 
 function sensorOn(variant: Variant): ContactSensor {

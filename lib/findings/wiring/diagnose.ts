@@ -4,7 +4,7 @@ import { findConflict } from './conflict';
 import { MECHANISMS } from './mechanisms';
 import { chooseNextCheck } from './next-check';
 import { listNotProven } from './not-proven';
-import { hypothesesOf, piecesOf, type Piece } from './pieces';
+import { hypothesesOf, piecesOf, standingUnder, type Piece } from './pieces';
 import { rankCandidates } from './standing';
 
 export { expectedReadings, type ExpectedReadings, type ReadingOptions } from './predict';
@@ -19,8 +19,9 @@ export function diagnoseWiring(evidence: WiringEvidence): WiringDiagnosis {
   const pieces = piecesOf(evidence);
   const fitting: WiringCondition[] = [];
   const ruledOut: WiringDiagnosis['ruledOut'] = [];
+  const standing = new Map(pieces.map((piece) => [piece, standingUnder(piece, evidence)]));
   for (const hypothesis of hypothesesOf(evidence)) {
-    const against = pieces.find((piece) => !piece.fits(hypothesis));
+    const against = pieces.find((piece) => !standing.get(piece)?.has(hypothesis.condition));
     if (against) ruledOut.push({ condition: hypothesis.condition, because: against.excludes(hypothesis) });
     else fitting.push(hypothesis.condition);
   }

@@ -33,6 +33,8 @@ const LOAD_LENGTHS = [1, 4.5] as const;
 export class Variant {
   #ports?: Ports;
   #lamps?: Trio;
+  #potentials?: Record<SlotNode, number>;
+  #groundOhms?: number;
   #meters: Partial<Record<Meter, Trio>> = {};
   #loads = new Map<number, readonly LoadPrediction[]>();
 
@@ -49,22 +51,29 @@ export class Variant {
 
   /** V rms that a meter shows, one pair at a time. */
   meterVolts(meter: Meter): Trio {
+    const known = this.#meters[meter];
+    if (known) return known;
     const ports = this.#solved();
     const read = (a: SlotNode, b: SlotNode) => voltsAcross(ports, a, b, METER_OHMS[meter]);
-    this.#meters[meter] ??= [read('H', 'N'), read('H', 'G'), read('N', 'G')];
-    return this.#meters[meter];
+    const trio: Trio = [read('H', 'N'), read('H', 'G'), read('N', 'G')];
+    this.#meters[meter] = trio;
+    return trio;
   }
 
   /** V rms of each slot against earth with nothing in the slots: what a non-contact sensor feels. */
   get slotPotentials(): Record<SlotNode, number> {
     const against = (slot: SlotNode) => voltsBetween(this.#solved().open, slot, 'E');
-    return { H: against('H'), N: against('N'), G: against('G') };
+    this.#potentials ??= { H: against('H'), N: against('N'), G: against('G') };
+    return this.#potentials;
   }
 
   /** Impedance in ohms from the ground slot to the bar of the panel, sources at rest. */
   get groundOhms(): number {
-    const { re, im } = impedance(this.#solved(), 'G', 'P');
-    return Math.hypot(re, im);
+    if (this.#groundOhms === undefined) {
+      const { re, im } = impedance(this.#solved(), 'G', 'P');
+      this.#groundOhms = Math.hypot(re, im);
+    }
+    return this.#groundOhms;
   }
 
   /** Before and under a plug-in load of so many amperes at 120 V, on a short and on a long cable. */

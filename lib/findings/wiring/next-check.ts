@@ -125,7 +125,7 @@ function outcomeTable(kind: CheckKind, evidence: WiringEvidence): Map<WiringCond
       const standing = families.flat().filter((variant) => !(off && variant.wiring.removable));
       const shares: Shares = new Map();
       for (const variant of standing) {
-        const outcome = outcomeOf(kind, variant, condition, hypotheses, evidence);
+        const outcome = outcomeOf(kind, variant, condition, evidence);
         shares.set(outcome, (shares.get(outcome) ?? 0) + 1 / standing.length);
       }
       return [condition, shares];

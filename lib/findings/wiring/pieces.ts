@@ -1,13 +1,25 @@
 import type { WiringEvidence } from '../facts';
 import { WIRING_CONDITIONS, type WiringCondition } from '../vocabulary';
 import { lampsInWords, voltsInWords } from '../evidence';
-import { groundOhmsFit, lampsFit, loadTestFits, loadsAreOff, sensorFits, someVariant, trioFits, triosOf } from './fit';
+import {
+  groundOhmsFit,
+  lampsFit,
+  loadTestFits,
+  loadsAreOff,
+  sensorFits,
+  sensorSays,
+  someVariant,
+  trioFits,
+  triosOf,
+} from './fit';
 import { hypothesesFor, type Hypothesis } from './hypotheses';
 import { predictedLamps, predictedVolts } from './predict';
 
 /** One thing that is known of a receptacle, with the conditions that it leaves standing and why it excludes others. */
 export type Piece = {
   kind: 'face' | 'lamps' | 'volts' | 'load-test' | 'sensor' | 'ground-ohms' | 'jumper' | 'power' | 'loads' | 'neutral';
+  /** Equal keys leave the same conditions standing on the same kind of receptacle. */
+  key: string;
   name: string;
   fits: (hypothesis: Hypothesis) => boolean;
   excludes: (hypothesis: Hypothesis) => string;
@@ -56,16 +68,27 @@ export function hypothesesOf({ nominalVolts = 120, supply }: WiringEvidence): re
   return hypothesesFor(nominalVolts, supply);
 }
 
-/** The conditions that a piece leaves standing. */
-export function standingUnder(piece: Piece, evidence: WiringEvidence): Set<WiringCondition> {
+const MOST_KEPT = 4000;
+const kept = new Map<string, ReadonlySet<WiringCondition>>();
+
+/** The conditions that a piece leaves standing. Remembered: the same readings come again and again in a house. */
+export function standingUnder(piece: Piece, evidence: WiringEvidence): ReadonlySet<WiringCondition> {
+  const { slots, nominalVolts = 120, supply } = evidence;
+  const key = `${slots} ${nominalVolts} ${supply} ${loadsAreOff(evidence)} ${piece.kind} ${piece.key}`;
+  const known = kept.get(key);
+  if (known) return known;
   const standing = hypothesesOf(evidence).filter((hypothesis) => piece.fits(hypothesis));
-  return new Set(standing.map(({ condition }) => condition));
+  const conditions = new Set(standing.map(({ condition }) => condition));
+  if (kept.size >= MOST_KEPT) kept.clear();
+  kept.set(key, conditions);
+  return conditions;
 }
 
 function facePiece({ slots, nominalVolts }: WiringEvidence): Piece {
   const noGround = (condition: WiringCondition) => slots === 2 && GROUND_CONDITIONS.includes(condition);
   return {
     kind: 'face',
+    key: '',
     name: slots === 2 ? 'a two-slot face' : 'the face',
     fits: ({ condition, families }) => families.length > 0 && !noGround(condition),
     excludes: ({ condition }) => {
@@ -85,6 +108,7 @@ function lampsPiece(evidence: WiringEvidence): Piece[] {
   return [
     {
       kind: 'lamps',
+      key: shown,
       name: `the lamps (${shown})`,
       fits: (hypothesis) => someVariant(hypothesis, off, (variant) => lampsFit(variant, lamps, slots)),
       excludes: (hypothesis) => `Lamps would show ${predictedLamps(hypothesis, off, slots)}; they showed ${shown}.`,
@@ -99,6 +123,7 @@ function voltPieces(evidence: WiringEvidence): Piece[] {
     const shown = slots === 2 ? `${trio.meter} meter: ${trio.hn} volts between the slots` : voltsInWords(trio);
     return {
       kind: 'volts' as const,
+      key: shown,
       name: `the ${shown}`,
       fits: (hypothesis: Hypothesis) => trioFits(hypothesis, trio, slots, off),
       excludes: (hypothesis: Hypothesis) =>
@@ -114,6 +139,7 @@ function loadTestPiece(evidence: WiringEvidence): Piece[] {
   return [
     {
       kind: 'load-test',
+      key: shown,
       name: `the load test (${shown})`,
       fits: (hypothesis) =>
         someVariant(hypothesis, loadsAreOff(evidence), (variant) => loadTestFits(variant, loadTest)),
@@ -128,6 +154,7 @@ function sensorPiece(evidence: WiringEvidence): Piece[] {
   return [
     {
       kind: 'sensor',
+      key: Object.entries(sensorSays(sensor)).flat().join(' '),
       name: 'what the live-wire sensor answered',
       fits: (hypothesis) =>
         someVariant(hypothesis, loadsAreOff(evidence), (variant) => sensorFits(variant, sensor, slots)),
@@ -142,6 +169,7 @@ function groundOhmsPiece(evidence: WiringEvidence): Piece[] {
   return [
     {
       kind: 'ground-ohms',
+      key: `${groundOhms}`,
       name: `the ground path of ${groundOhms} ohms`,
       fits: (hypothesis) =>
         someVariant(hypothesis, loadsAreOff(evidence), (variant) =>
@@ -161,6 +189,7 @@ function contextPieces(evidence: WiringEvidence): Piece[] {
   if (groundJumperSeen)
     pieces.push({
       kind: 'jumper',
+      key: '',
       name: 'the jumper that was seen from neutral to the ground slot',
       fits: ({ condition }) => BESIDE_A_JUMPER.includes(condition),
       excludes: () => 'A jumper from neutral to the ground slot was seen here.',
@@ -176,6 +205,7 @@ function contextPieces(evidence: WiringEvidence): Piece[] {
   if (loadsAreOff(evidence))
     pieces.push({
       kind: 'loads',
+      key: '',
       name: 'the loads that were taken off',
       fits: (hypothesis) => someVariant(hypothesis, true, () => true),
       excludes: () => 'Everything was unplugged and what is wired in was off, so no load can carry this.',
@@ -184,7 +214,7 @@ function contextPieces(evidence: WiringEvidence): Piece[] {
 }
 
 function without(kind: Piece['kind'], condition: WiringCondition, name: string, because: string): Piece {
-  return { kind, name, fits: (hypothesis) => hypothesis.condition !== condition, excludes: () => because };
+  return { kind, key: '', name, fits: (hypothesis) => hypothesis.condition !== condition, excludes: () => because };
 }
 
 /** Position in the vocabulary, so that lists never depend on the order of input. */

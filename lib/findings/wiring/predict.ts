@@ -87,8 +87,14 @@ function typicalWiring(condition: WiringCondition, options: ReadingOptions): Wir
 
 /** The variant of the plain cable, without other coupling; else the first. */
 function nominalOf({ families }: Hypothesis, loadsOff = false): Variant | undefined {
-  const standing = families.flat().filter((variant) => !(loadsOff && variant.wiring.removable));
-  return standing.find((variant) => !variant.wiring.stray) ?? standing[0] ?? families[0]?.[0];
+  let first: Variant | undefined;
+  for (const family of families)
+    for (const variant of family) {
+      if (loadsOff && variant.wiring.removable) continue;
+      if (!variant.wiring.stray) return variant;
+      first ??= variant;
+    }
+  return first ?? families[0]?.[0];
 }
 
 function lampsOf(variant: Variant): LampPattern {
