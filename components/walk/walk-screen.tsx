@@ -29,7 +29,9 @@ export function WalkScreen() {
   );
   const { inspectionId, view } = useMemo(() => parseAddress(hash), [hash]);
   const walk = useWalk(inspectionId);
-  useEffect(() => window.scrollTo(0, 0), [hash]);
+  useEffect(() => {
+    void window.scrollTo(0, 0);
+  }, [hash]);
 
   if (!inspectionId)
     return (
