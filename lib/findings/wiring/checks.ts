@@ -18,6 +18,9 @@ export const CHECK_KINDS = [
 ] as const;
 export type CheckKind = (typeof CHECK_KINDS)[number];
 
+/** What the candidates that stand can do to whoever touches metal there. */
+export type Danger = { liveGround: boolean; openGround: boolean };
+
 /** What the model says a check would show on one variant: a label, equal where the answers could not be told apart. */
 export type Outcome = string;
 

@@ -1,6 +1,5 @@
 import type { WiringEvidence } from '../facts';
-import type { CheckKind } from './checks';
-import type { Danger } from './next-check';
+import type { CheckKind, Danger } from './checks';
 
 /** The check in the imperative, with what keeps the person who does it from harm. */
 export function instructionFor(kind: CheckKind, evidence: WiringEvidence, danger: Danger): string {
@@ -15,7 +14,7 @@ const OPEN_CAUTION = ' The ground may be open: touch no metal of the cover or of
 const TEXTS: Record<CheckKind, (evidence: WiringEvidence) => string> = {
   sensor: sensorText,
   power: () =>
-    'Check that the breaker is on, that no GFCI upstream has tripped and that no wall switch feeds this outlet. Then read the lamps again.',
+    'Check that the breaker is on, that no GFCI upstream has tripped and that no wall switch feeds this outlet. Then read again.',
   unplug: () =>
     'Switch off and unplug everything on this circuit, holding plugs by their insulated bodies, and switch off what is wired in: lights, smoke alarms, a doorbell transformer. Then read the lamps again.',
   'high-impedance': ({ slots }) =>
@@ -29,7 +28,7 @@ const TEXTS: Record<CheckKind, (evidence: WiringEvidence) => string> = {
       ? 'Set the meter to low impedance and read the voltage between the two slots.'
       : 'Set the meter to low impedance and read neutral to ground, hot to neutral and last hot to ground. The last draws about 40 milliamperes and trips a GFCI: first make sure that nothing on this circuit has to stay on.',
   'load-test': () =>
-    'Do a load test: read hot to neutral and neutral to ground without load, then with a 12 to 15 ampere plug-in load, and take the load off at once. Leave it out where there is heat damage, or where something on this circuit has to stay on.',
+    'Do a load test: read hot to neutral and neutral to ground without load, then with a 12 to 15 ampere plug-in load, and take the load off at once. Where another circuit may share the neutral, have that one off. Leave it out where there is heat damage, or where something on this circuit has to stay on.',
   'ground-ohms': () =>
     'Read the ground path in ohms with a ground-impedance instrument. It trips GFCIs, and it has no place near medical equipment.',
 };

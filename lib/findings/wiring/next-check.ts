@@ -1,6 +1,6 @@
 import type { WiringDiagnosis, WiringEvidence } from '../facts';
 import type { WiringCondition } from '../vocabulary';
-import { CHECK_KINDS, isOpen, outcomeOf, type CheckKind, type Outcome } from './checks';
+import { CHECK_KINDS, isOpen, outcomeOf, type CheckKind, type Danger, type Outcome } from './checks';
 import { hasMeter, lampsFit, loadsAreOff, sensorFits, trioFitsVariant, triosOf } from './fit';
 import type { Hypothesis } from './hypotheses';
 import { instructionFor } from './instructions';
@@ -11,11 +11,10 @@ import { hypothesesOf } from './pieces';
 const LIVE_VOLTS = 50;
 /** Above this a ground path is none: a person who touches the metal is the path. */
 const OPEN_OHMS = 100_000;
+const MOST_LOADED_VOLTS = 132;
 /** A check that is expected to tell less is not worth a step. */
 const LEAST_GAIN_BITS = 0.1;
 const EQUAL_GAIN_BITS = 0.01;
-
-export type Danger = { liveGround: boolean; openGround: boolean };
 
 /**
  * The check that is expected to tell the remaining candidates apart best: each open check is worked out on the circuit
@@ -28,15 +27,21 @@ export function chooseNextCheck(
 ): WiringDiagnosis['nextCheck'] {
   if (fitting.length < 2) return undefined;
   const danger = dangerOf(fitting, evidence);
-  const useful = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence))
-    .map((kind) => ({ kind, ...worthOf(kind, fitting, evidence) }))
-    .filter((check) => check.gain > LEAST_GAIN_BITS);
-  const first = useful[0];
-  if (!first) return undefined;
+  const rated = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence)).map((kind) => ({
+    kind,
+    ...worthOf(kind, fitting, evidence),
+  }));
   // Whoever goes on to touch the device or an appliance has to know first whether its metal is live.
-  const sensorFirst = first.kind === 'sensor' && danger.liveGround;
-  const best = sensorFirst ? first : useful.reduce((a, b) => (b.gain > a.gain + EQUAL_GAIN_BITS ? b : a));
-  return { instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
+  const isDangerous = danger.liveGround || danger.openGround;
+  const sensor = isDangerous ? rated.find((check) => check.kind === 'sensor' && check.separates.length > 0) : undefined;
+  const useful = rated.filter((check) => check.gain > LEAST_GAIN_BITS);
+  const best = sensor ?? useful.toSorted((a, b) => rankOf(b.gain) - rankOf(a.gain))[0];
+  return best && { instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
+}
+
+/** Gains that differ by less than this are equal, and then the safer check goes first. */
+function rankOf(gain: number): number {
+  return Math.round(gain / EQUAL_GAIN_BITS);
 }
 
 /** What the candidates that still stand can do to the person who goes on testing. From the model, not from a list. */
@@ -75,11 +80,17 @@ function isSafe(kind: CheckKind, { liveGround, openGround }: Danger, evidence: W
       return true;
     case 'low-impedance-neutral':
       return metered && (liveGround || openGround);
-    case 'low-impedance-all':
     case 'load-test':
+      return metered && !liveGround && !openGround && takesLoad(evidence);
+    case 'low-impedance-all':
     case 'ground-ohms':
       return metered && !liveGround && !openGround;
   }
+}
+
+/** A 120 V load has no place on more than that. */
+function takesLoad(evidence: WiringEvidence): boolean {
+  return evidence.nominalVolts !== 240 && triosOf(evidence).every((trio) => trio.hn <= MOST_LOADED_VOLTS);
 }
 
 type Worth = { gain: number; separates: WiringCondition[] };
