@@ -1,4 +1,5 @@
 import { drawingOf } from '@/components/drawings/receptacle-drawing';
+import type { Drawing as Shapes } from '@/components/drawings/shapes';
 import type { SnapshotFinding } from '@/lib/schemas/snapshot';
 import { PdfReceptacle } from './pdf-receptacle';
 
@@ -6,14 +7,14 @@ type Drawing = NonNullable<SnapshotFinding['drawing']>;
 
 /** What was read: three lamps or volts on a ring around the face; the device itself where neither was read. */
 export function ReadingDrawing({ drawing, width }: { drawing: Drawing; width: number }) {
-  return <PdfReceptacle drawing={readingOf(drawing)} width={width} />;
+  return <Fitted drawing={readingOf(drawing)} width={width} />;
 }
 
 /** What that most often means: the conductors behind the face. */
 export function WiresDrawing({ drawing, width }: { drawing: Drawing; width: number }) {
   if (!drawing.condition) return null;
   const { pattern, condition } = drawing;
-  return <PdfReceptacle drawing={drawingOf({ view: 'wiring', pattern, condition })} width={width} />;
+  return <Fitted drawing={drawingOf({ view: 'wiring', pattern, condition })} width={width} />;
 }
 
 /** A ring without a reading, for the cover. */
@@ -24,4 +25,10 @@ export function EmptyRing({ width }: { width: number }) {
 function readingOf({ pattern, device, lamps, volts }: Drawing) {
   if (!lamps && !volts) return drawingOf({ view: 'face', pattern, device });
   return drawingOf({ view: 'reading', pattern, ...(lamps ? { lamps } : { volts }) });
+}
+
+/** Within a square of that width, whatever its shape. */
+function Fitted({ drawing, width }: { drawing: Shapes; width: number }) {
+  const [, , boxWidth, boxHeight] = drawing.box;
+  return <PdfReceptacle drawing={drawing} width={boxHeight > boxWidth ? (width * boxWidth) / boxHeight : width} />;
 }

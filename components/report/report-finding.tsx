@@ -12,54 +12,95 @@ import { Limits } from './report-parts';
 import { FigurePhoto, PhotoRows } from './report-photos';
 import { styles } from './report-styles';
 
+/** More lines of evidence, or more letters of what is unproven, take the whole width; evidence then runs on over pages. */
+const MOST_LINES_BESIDE = 6;
+const MOST_LETTERS_BESIDE = 260;
+
 /** One finding: what was read, what it most often means, what the danger is, and what none of it proves. */
 export function ReportFinding({ print, finding }: { print: ReportPrint; finding: SnapshotFinding }) {
-  const { messages, locale } = print;
-  const text = (locale === 'es' ? finding.text.es : undefined) ?? finding.text.en;
   const [firstPhoto, ...morePhotos] = finding.photoIds;
+  const lines = evidenceOf(print, finding);
+  const letters = textOf(print, finding).unproven.join('').length;
+  const isBeside = lines.length <= MOST_LINES_BESIDE && letters <= MOST_LETTERS_BESIDE;
   return (
-    <View style={{ marginBottom: 22 }}>
-      <View wrap={false}>
-        <Anchor print={print} id={finding.id} />
-        <View
-          style={[styles.row, { alignItems: 'center', marginBottom: 6 }]}
-          {...bookmark(headline(finding, text.title))}
-        >
-          <HazardTag signal={finding.signal} word={messages.signal[finding.signal]} large={startsPage(finding)} />
-          <Text style={[styles.doing, styles.grow, { marginLeft: 9 }]}>{messages.urgency[finding.urgency]}</Text>
-          <Text style={styles.small}>{messages.finding.heading(finding.number)}</Text>
-        </View>
-        <Text style={startsPage(finding) ? styles.h1 : styles.h1Small}>{headline(finding, text.title)}</Text>
-        <Figures print={print} finding={finding} photoId={firstPhoto} />
-        <HazardParts print={print} hazard={text.hazard} who={text.who} />
-        <Text style={[styles.read, { marginTop: 8 }]}>{text.observed}</Text>
-        <Text style={[styles.read, { marginTop: 4, marginBottom: 10 }]}>{text.means}</Text>
+    <View style={{ paddingBottom: startsPage(finding) ? 0 : 18 }}>
+      <Statement print={print} finding={finding} photoId={firstPhoto} />
+      {!isBeside && <Evidence print={print} lines={lines} />}
+      <View style={{ marginTop: 8 }} wrap={false}>
         <View style={styles.row}>
-          <Evidence print={print} finding={finding} />
-          <View style={{ width: 225 }}>
-            <Limits>
-              <Text style={styles.h3}>{messages.finding.unproven}</Text>
-              {text.unproven.map((line) => (
-                <Text key={line} style={{ marginBottom: 2 }}>
-                  {line}
-                </Text>
-              ))}
-            </Limits>
+          {isBeside && (
+            <View style={{ width: 290, paddingRight: 18 }}>
+              <Evidence print={print} lines={lines} />
+            </View>
+          )}
+          <View style={styles.grow}>
+            <Unproven print={print} finding={finding} />
           </View>
         </View>
-        <View style={styles.refer}>
-          <Text>
-            <Text style={styles.bold}>{messages.finding.referral} </Text>
-            {text.doNext}
-          </Text>
-        </View>
-        {finding.hook && (
-          <Text style={[styles.small, { marginTop: 6 }]}>
-            {messages.finding.hook(finding.hook.section, finding.hook.since)}
-          </Text>
-        )}
+        <Referral print={print} finding={finding} />
       </View>
       <PhotoRows print={print} photoIds={morePhotos} />
+    </View>
+  );
+}
+
+type Part = { print: ReportPrint; finding: SnapshotFinding };
+
+function textOf({ locale }: ReportPrint, { text }: SnapshotFinding) {
+  return (locale === 'es' ? text.es : undefined) ?? text.en;
+}
+
+/** Head, drawings, the four parts of the caution and the words: never split. */
+function Statement({ print, finding, photoId }: Part & { photoId?: string }) {
+  const { messages } = print;
+  const text = textOf(print, finding);
+  const isGrave = startsPage(finding);
+  return (
+    <View wrap={false}>
+      <Anchor print={print} id={finding.id} />
+      <View
+        style={[styles.row, { alignItems: 'center', marginBottom: 6 }]}
+        {...bookmark(headline(finding, text.title))}
+      >
+        <HazardTag signal={finding.signal} word={messages.signal[finding.signal]} large={isGrave} />
+        <Text style={[styles.doing, styles.grow, { marginLeft: 9 }]}>{messages.urgency[finding.urgency]}</Text>
+        <Text style={styles.small}>{messages.finding.heading(finding.number)}</Text>
+      </View>
+      <Text style={isGrave ? styles.h1 : styles.h1Small}>{headline(finding, text.title)}</Text>
+      <Figures print={print} finding={finding} photoId={photoId} />
+      <HazardParts print={print} hazard={text.hazard} who={text.who} />
+      <Text style={[styles.read, { marginTop: 8 }]}>{text.observed}</Text>
+      <Text style={[styles.read, { marginTop: 4 }]}>{text.means}</Text>
+    </View>
+  );
+}
+
+function Unproven({ print, finding }: Part) {
+  return (
+    <Limits>
+      <Text style={styles.h3}>{print.messages.finding.unproven}</Text>
+      {textOf(print, finding).unproven.map((line) => (
+        <Text key={line} style={{ fontSize: 8.8, marginBottom: 2 }}>
+          {line}
+        </Text>
+      ))}
+    </Limits>
+  );
+}
+
+function Referral({ print, finding }: Part) {
+  const { finding: words } = print.messages;
+  return (
+    <View>
+      <View style={styles.refer}>
+        <Text>
+          <Text style={styles.bold}>{words.referral} </Text>
+          {textOf(print, finding).doNext}
+        </Text>
+      </View>
+      {finding.hook && (
+        <Text style={[styles.small, { marginTop: 6 }]}>{words.hook(finding.hook.section, finding.hook.since)}</Text>
+      )}
     </View>
   );
 }
@@ -72,12 +113,12 @@ function Figures({ print, finding, photoId }: { print: ReportPrint; finding: Sna
     <View style={[styles.row, { alignItems: 'flex-end', marginBottom: 10 }]}>
       {drawing && (
         <Figure caption={messages.finding.read} says={readingWords(drawing)}>
-          <ReadingDrawing drawing={drawing} width={130} />
+          <ReadingDrawing drawing={drawing} width={112} />
         </Figure>
       )}
       {drawing?.condition && (
         <Figure caption={messages.finding.means} says={wiresWords(drawing, messages)}>
-          <WiresDrawing drawing={drawing} width={130} />
+          <WiresDrawing drawing={drawing} width={112} />
         </Figure>
       )}
       {photoId && <FigurePhoto print={print} photoId={photoId} />}
@@ -127,19 +168,27 @@ function HazardParts({ print, hazard, who }: { print: ReportPrint; hazard: Hazar
   );
 }
 
-function Evidence({ print, finding }: { print: ReportPrint; finding: SnapshotFinding }) {
-  const { messages, snapshot } = print;
-  const { timeZone } = snapshot.inspection;
-  const told = finding.told.map(({ at, whom, note }) => ({
+type EvidenceLine = { at?: string; instrument: string; showed: string };
+
+function evidenceOf({ messages }: ReportPrint, { evidence, told }: SnapshotFinding): EvidenceLine[] {
+  const toldLines = told.map(({ at, whom, note }) => ({
     at,
     instrument: messages.finding.told,
     showed: [whom, note].filter(Boolean).join('. '),
   }));
+  return [...evidence, ...toldLines];
+}
+
+function Evidence({ print, lines }: { print: ReportPrint; lines: EvidenceLine[] }) {
+  const { messages, snapshot } = print;
+  const { timeZone } = snapshot.inspection;
   return (
-    <View style={{ flex: 1, paddingRight: 18 }}>
-      <Text style={styles.h3}>{messages.finding.evidence}</Text>
-      {[...finding.evidence, ...told].map((line, index) => (
-        <View key={index} style={[styles.row, styles.line, { paddingVertical: 3.5, fontSize: 8.5 }]}>
+    <View style={{ marginTop: 6 }}>
+      <Text style={styles.h3} minPresenceAhead={30}>
+        {messages.finding.evidence}
+      </Text>
+      {lines.map((line, index) => (
+        <View key={index} style={[styles.row, styles.line, { paddingVertical: 3, fontSize: 8.5 }]} wrap={false}>
           <Text style={{ width: 46 }}>{line.at ? timeIn(timeZone, line.at) : ''}</Text>
           <Text style={{ width: 92, paddingRight: 4 }}>{line.instrument}</Text>
           <Text style={styles.grow}>{line.showed}</Text>

@@ -70,7 +70,7 @@ function LaterItem({ print, finding }: { print: ReportPrint; finding: SnapshotFi
   const { messages, locale } = print;
   return (
     <View style={[styles.row, styles.line, { alignItems: 'center' }]} wrap={false}>
-      <View style={{ width: 70 }}>
+      <View style={{ width: 82 }}>
         <HazardTag signal={finding.signal} word={messages.signal[finding.signal]} />
       </View>
       <Text style={[styles.grow, { marginHorizontal: 8 }]}>

@@ -8,7 +8,7 @@ import { styles } from './report-styles';
 export function FigurePhoto({ print, photoId }: { print: ReportPrint; photoId: string }) {
   return (
     <View style={{ flex: 1, maxWidth: 240 }}>
-      <Picture print={print} photoId={photoId} height={130} />
+      <Picture print={print} photoId={photoId} height={112} />
     </View>
   );
 }

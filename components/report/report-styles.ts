@@ -27,8 +27,8 @@ const row = { flexDirection: 'row' } as const;
 
 export const styles = StyleSheet.create({
   page: {
-    paddingTop: 84,
-    paddingBottom: 64,
+    paddingTop: 74,
+    paddingBottom: 58,
     paddingHorizontal: MARGIN,
     fontFamily: SANS,
     fontSize: 9.5,
@@ -36,7 +36,7 @@ export const styles = StyleSheet.create({
   },
   header: {
     position: 'absolute',
-    top: MARGIN,
+    top: 36,
     left: MARGIN,
     right: MARGIN,
     ...row,
@@ -61,12 +61,12 @@ export const styles = StyleSheet.create({
     color: INK_2,
   },
   folio: { width: 70, textAlign: 'right' },
-  h1: { fontFamily: SERIF, fontWeight: 700, fontSize: 20, lineHeight: 1.25, marginBottom: 8 },
+  h1: { fontFamily: SERIF, fontWeight: 700, fontSize: 18, lineHeight: 1.2, marginBottom: 6 },
   h1Small: { fontFamily: SERIF, fontWeight: 700, fontSize: 14, lineHeight: 1.3, marginBottom: 6 },
   h2: { fontFamily: SERIF, fontWeight: 700, fontSize: 12, lineHeight: 1.3 },
   section: { borderBottomWidth: 1.5, borderBottomColor: INK, paddingBottom: 4, marginTop: 20, marginBottom: 2 },
   h3: { fontWeight: 700, fontSize: 9.5, marginBottom: 3 },
-  read: { fontFamily: SERIF, fontSize: 9.5, lineHeight: 1.6 },
+  read: { fontFamily: SERIF, fontSize: 9.2, lineHeight: 1.45 },
   lead: { fontFamily: SERIF, fontSize: 10, lineHeight: 1.6, maxWidth: 430, marginBottom: 8 },
   doing: { fontFamily: SERIF, fontWeight: 700, fontSize: 11, lineHeight: 1.4 },
   row,
@@ -79,7 +79,7 @@ export const styles = StyleSheet.create({
   link: { color: INK, textDecoration: 'underline' },
   limits: { borderLeftWidth: 0.75, borderLeftColor: RULE, paddingLeft: 2 },
   limitsInner: { borderLeftWidth: 0.75, borderLeftColor: RULE, paddingLeft: 10 },
-  refer: { borderWidth: 0.75, borderColor: INK, padding: 9, marginTop: 10 },
+  refer: { borderWidth: 0.75, borderColor: INK, padding: 7, marginTop: 7 },
   fact: { ...row, borderBottomWidth: 0.5, borderBottomColor: HAIRLINE, paddingVertical: 6.5 },
   term: { width: 112, paddingRight: 10, color: INK_2 },
   grow: { flex: 1 },
