@@ -77,6 +77,7 @@ function snapshotFinding(
   const isAbout = (row: { receptacleId?: string; circuitId?: string }) =>
     (row.receptacleId !== undefined && receptacleIds.includes(row.receptacleId)) ||
     (circuitId !== undefined && row.circuitId === circuitId);
+  const isTold = finding.evidence.some((line) => line.instrument === 'Told');
   return {
     id: finding.id,
     code: finding.code,
@@ -89,7 +90,7 @@ function snapshotFinding(
     text: { en: text },
     evidence: finding.evidence.map(({ at, instrument, showed, by }) => ({ at, instrument, showed, by })),
     told: facts.notices
-      .filter((notice) => notice.kind === 'danger-told' && urgency === 'U1' && isAbout(notice))
+      .filter((notice) => !isTold && notice.kind === 'danger-told' && urgency === 'U1' && isAbout(notice))
       .map(({ at, whom = '', note }) => ({ at, whom, ...(note ? { note } : {}) })),
     photoIds: finding.photoIds.filter((id) => stored.has(id)),
     ...(finding.drawing ? { drawing: finding.drawing } : {}),
