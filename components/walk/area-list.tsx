@@ -1,16 +1,15 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import { v7 as uuidv7 } from 'uuid';
 import { PLACES, type PlaceKind } from '@/lib/findings/vocabulary';
 import type { WalkState } from '@/lib/schemas/walk';
 import type { Walk } from '@/lib/walk/use-walk';
 import { PLACE_LABELS } from './labels';
-import { areasInOrder, beadOf, countArea, countWords, receptaclesOf, type Bead } from './progress';
+import { areasInOrder, BEAD_SIGNS, beadOf, countArea, countWords, receptaclesOf } from './progress';
 import { addressOf, goTo } from './walk-address';
 import { WalkButton } from './walk-button';
-
-const BEADS: Record<Bead, string> = { correct: '●', fault: '☒', off: '◐', skipped: '–', untested: '○' };
 
 /** Areas in walking order, and what each still needs. */
 export function AreaList({ walk, state, off }: { walk: Walk; state: WalkState; off: Set<string> }) {
@@ -21,6 +20,15 @@ export function AreaList({ walk, state, off }: { walk: Walk; state: WalkState; o
     const { present, tested, skipped } = countArea(state, area.id);
     return present === 0 || tested + skipped < present;
   });
+  const router = useRouter();
+  const findings = `/inspections/${inspectionId}/findings` as const;
+
+  async function review() {
+    if (state.inspection.state === 'on-site') await walk.save([{ op: 'inspection.advance', to: 'in-review' }]);
+    await walk.refresh();
+    router.push(findings);
+  }
+
   if (adding || areas.length === 0)
     return <AddArea walk={walk} state={state} first={areas.length === 0} onDone={() => setAdding(false)} />;
   return (
@@ -34,13 +42,13 @@ export function AreaList({ walk, state, off }: { walk: Walk; state: WalkState; o
                 className="grid min-h-[56px] grid-cols-[1fr_auto] items-center gap-x-4 py-3"
               >
                 <span className="font-serif font-bold">{area.name}</span>
-                <span className="font-serif text-l" aria-hidden="true">
+                <span className="text-right font-serif text-l" aria-hidden="true">
                   {countArea(state, area.id).present}
                 </span>
                 <span aria-hidden="true" className="tracking-[0.25em] break-all">
-                  {receptaclesOf(state, area.id).map((row) => BEADS[beadOf(state, row, off)])}
+                  {receptaclesOf(state, area.id).map((row) => BEAD_SIGNS[beadOf(state, row, off)])}
                 </span>
-                <span className="text-s text-ink-2">{countWords(countArea(state, area.id))}</span>
+                <span className="text-right text-s text-ink-2">{countWords(countArea(state, area.id))}</span>
               </a>
             </li>
           ))}
@@ -57,11 +65,13 @@ export function AreaList({ walk, state, off }: { walk: Walk; state: WalkState; o
             Go on in {next.name}
           </a>
         ) : (
-          <a
-            className="flex min-h-[72px] items-center justify-center rounded-[2px] bg-inverse px-4 text-l font-bold text-on-inverse"
-            href={`/inspections/${inspectionId}/findings`}
-          >
-            See the findings
+          <WalkButton weight="log" records="Everything is tested or skipped" onClick={() => void review()}>
+            Review the findings
+          </WalkButton>
+        )}
+        {next && (
+          <a className="flex min-h-[56px] items-center justify-center underline underline-offset-4" href={findings}>
+            See the findings so far
           </a>
         )}
       </div>

@@ -10,6 +10,7 @@ import { LampPad, type TappedLamps } from './lamp-pad';
 import { lampsInWords, readsCorrect, SKIP_LABELS } from './labels';
 import { PhotoButton } from './photo-button';
 import { receptacleName, receptaclesOf, skipOf, standingReadings } from './progress';
+import { ReceptacleStrip } from './receptacle-strip';
 import { addressOf, goTo } from './walk-address';
 import { WalkButton } from './walk-button';
 
@@ -24,11 +25,13 @@ export function PadScreen({
   state,
   area,
   receptacleId,
+  off,
 }: {
   walk: Walk;
   state: WalkState;
   area: WalkArea;
   receptacleId?: string;
+  off: Set<string>;
 }) {
   const rows = receptaclesOf(state, area.id);
   const current = rows.find((row) => row.id === receptacleId) ?? firstUntested(state, rows);
@@ -83,61 +86,64 @@ export function PadScreen({
   if (skipping) return <SkipChoice name={name} onChoose={skip} onBack={() => setSkipping(false)} />;
   const pattern = wholePattern(lamps, twoSlot);
   return (
-    <div className="grid grow content-between gap-4 px-4 pb-4">
-      <div>
-        <div className="flex items-baseline justify-between gap-4 py-2">
-          <h2 className="font-serif text-l font-bold">{name}</h2>
-          {current && (
-            <a
-              className="flex min-h-[44px] items-center underline underline-offset-4"
-              href={addressOf(inspectionId, { kind: 'device', receptacleId: current.id })}
-            >
-              {current.device === 'receptacle' ? current.pattern : 'Device'}
-            </a>
-          )}
+    <div className="flex grow flex-col">
+      <ReceptacleStrip state={state} rows={rows} currentId={current?.id} off={off} />
+      <div className="grid grow content-between gap-4 px-4 pb-4">
+        <div>
+          <div className="flex items-baseline justify-between gap-4 py-2">
+            <h2 className="font-serif text-l font-bold">{name}</h2>
+            {current && (
+              <a
+                className="flex min-h-[44px] items-center underline underline-offset-4"
+                href={addressOf(inspectionId, { kind: 'device', receptacleId: current.id })}
+              >
+                {current.device === 'receptacle' ? current.pattern : 'Device'}
+              </a>
+            )}
+          </div>
+          <LampPad pattern={current?.pattern ?? '5-15R'} lamps={lamps} onChange={setLamps} />
         </div>
-        <LampPad pattern={current?.pattern ?? '5-15R'} lamps={lamps} onChange={setLamps} />
-      </div>
-      <div className="grid gap-2">
-        <div className="grid grid-cols-3 gap-2">
-          {untouched ? (
-            <WalkButton onClick={() => void log(twoSlot ? { ...ALL_OFF } : ALL_OFF)}>
-              All {twoSlot ? '' : 'three '}off
-            </WalkButton>
-          ) : (
-            <WalkButton onClick={() => setLamps({})}>Clear</WalkButton>
-          )}
-          <WalkButton onClick={() => setSkipping(true)}>Skip…</WalkButton>
-          <PhotoButton walk={walk} subject={photoSubject} />
-        </div>
-        <WalkButton
-          weight="log"
-          records={recordsWords(pattern, untouched)}
-          onClick={() => void log(untouched ? correctOf(twoSlot) : pattern)}
-        >
-          {untouched ? 'Lamps read correct' : namePattern(pattern)}
-        </WalkButton>
-        <div className="grid grid-cols-2 gap-2">
-          <TripLink inspectionId={inspectionId} current={current} />
-          <WalkButton weight="quiet" onClick={() => void addAnother(walk, area, rows)}>
-            Add a receptacle
+        <div className="grid gap-2">
+          <div className="grid grid-cols-3 gap-2">
+            {untouched ? (
+              <WalkButton onClick={() => void log(twoSlot ? { ...ALL_OFF } : ALL_OFF)}>
+                All {twoSlot ? '' : 'three '}off
+              </WalkButton>
+            ) : (
+              <WalkButton onClick={() => setLamps({})}>Clear</WalkButton>
+            )}
+            <WalkButton onClick={() => setSkipping(true)}>Skip…</WalkButton>
+            <PhotoButton walk={walk} subject={photoSubject} />
+          </div>
+          <WalkButton
+            weight="log"
+            records={recordsWords(pattern, untouched)}
+            onClick={() => void log(untouched ? correctOf(twoSlot) : pattern)}
+          >
+            {untouched ? 'Lamps read correct' : namePattern(pattern)}
           </WalkButton>
+          <div className="grid grid-cols-2 gap-2">
+            <TripLink inspectionId={inspectionId} current={current} />
+            <WalkButton weight="quiet" onClick={() => void addAnother(walk, area, rows)}>
+              Add a receptacle
+            </WalkButton>
+          </div>
+          <p
+            role="status"
+            className="flex min-h-[56px] items-center justify-between gap-4 border-t border-hairline text-s"
+          >
+            <span>{logged ? `Logged ${logged.words}` : skippedWords(state, current)}</span>
+            {logged && (
+              <button
+                type="button"
+                className="min-h-[56px] px-4 text-m underline underline-offset-4"
+                onClick={() => void undo()}
+              >
+                Undo
+              </button>
+            )}
+          </p>
         </div>
-        <p
-          role="status"
-          className="flex min-h-[56px] items-center justify-between gap-4 border-t border-hairline text-s"
-        >
-          <span>{logged ? `Logged ${logged.words}` : skippedWords(state, current)}</span>
-          {logged && (
-            <button
-              type="button"
-              className="min-h-[56px] px-4 text-m underline underline-offset-4"
-              onClick={() => void undo()}
-            >
-              Undo
-            </button>
-          )}
-        </p>
       </div>
     </div>
   );

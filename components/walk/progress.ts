@@ -3,6 +3,15 @@ import { readsCorrect } from './labels';
 
 export type Bead = 'correct' | 'fault' | 'off' | 'skipped' | 'untested';
 
+export const BEAD_SIGNS: Record<Bead, string> = { correct: '●', fault: '☒', off: '◐', skipped: '–', untested: '○' };
+export const BEAD_WORDS: Record<Bead, string> = {
+  correct: 'lamps correct',
+  fault: 'fault',
+  off: 'still off',
+  skipped: 'skipped',
+  untested: 'untested',
+};
+
 export function areasInOrder(state: WalkState): WalkArea[] {
   return state.areas.filter((area) => !area.deleted).toSorted((a, b) => a.order - b.order || a.id.localeCompare(b.id));
 }

@@ -12,7 +12,7 @@ import { GroundForm, LoadForm, MeterForm, SensorForm } from './evidence-forms';
 import { lampsInWords } from './labels';
 import { PhotoButton } from './photo-button';
 import { standingReadings } from './progress';
-import { addressOf } from './walk-address';
+import { addressOf, goTo } from './walk-address';
 import { Choices, WalkButton } from './walk-button';
 
 type Instrument = 'sensor' | 'meter' | 'load' | 'ground' | 'loads' | 'panel';
@@ -50,6 +50,11 @@ export function ResultScreen({
   async function add(part: WiringReadingEvidence) {
     await walk.save([reading(state, receptacle.id, part)]);
     setOpen(undefined);
+  }
+  async function undo() {
+    const last = standingReadings(state, receptacle.id).findLast((row) => row.kind === 'wiring' && row.evidence.lamps);
+    if (last) await walk.save([{ op: 'reading.withdraw', id: last.id }]);
+    goTo(state.inspection.id, { kind: 'area', areaId: receptacle.areaId, receptacleId: receptacle.id });
   }
   async function addLoad(test: LoadTest) {
     await walk.save([
@@ -153,6 +158,9 @@ export function ResultScreen({
         >
           Read the lamps again
         </a>
+        <WalkButton weight="quiet" className="col-span-2" onClick={() => void undo()}>
+          Undo this lamp reading
+        </WalkButton>
       </div>
     </div>
   );

@@ -137,7 +137,11 @@ function View({ walk, state, view, points, off }: OpenedProps & { points: StillO
       return <WaitingScreen walk={walk} onDiscard={(key) => void discardRejected(phoneStore(), key)} />;
     case 'area': {
       const area = state.areas.find((row) => row.id === view.areaId && !row.deleted);
-      return area ? <PadScreen walk={walk} state={state} area={area} receptacleId={view.receptacleId} /> : <Gone />;
+      return area ? (
+        <PadScreen walk={walk} state={state} area={area} receptacleId={view.receptacleId} off={off} />
+      ) : (
+        <Gone />
+      );
     }
     case 'result':
       return receptacle ? (

@@ -45,6 +45,11 @@ export function InspectionForm({ inspectors, leadMembershipId, timeZone, statePr
   const { register, formState } = form;
   const at = (field: string) => ({ id: field, error: problems.find((problem) => problem.field === field)?.says });
 
+  /** The house's state brings its profile; the person can choose another. */
+  function followState(event: { target: { value: string } }) {
+    form.setValue('stateProfile', STATE_PROFILES.find((code) => code === event.target.value) ?? 'general');
+  }
+
   async function book(values: NewInspection) {
     setProblems([]);
     const outcome = await bookInspectionAction(values).catch(() => null);
@@ -77,7 +82,11 @@ export function InspectionForm({ inspectors, leadMembershipId, timeZone, statePr
           <TextField label="City or town" {...at('address.city')} {...register('address.city')} />
           <TextField label="County" {...at('address.county')} {...register('address.county')} />
           <div className="grid grid-cols-2 gap-4">
-            <SelectField label="State" {...at('address.state')} {...register('address.state')}>
+            <SelectField
+              label="State"
+              {...at('address.state')}
+              {...register('address.state', { onChange: followState })}
+            >
               <option value="">Choose</option>
               {US_STATES.map((state) => (
                 <option key={state}>{state}</option>

@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useActionState } from 'react';
 import { Button } from '@/components/ui/button';
 import { ErrorSummary } from '@/components/ui/error-summary';
@@ -17,6 +18,8 @@ type DecisionFormProps = {
   standing: DecisionStanding;
   decision?: WalkDecision;
   original: { observed: string; plain: string };
+  nextId?: string;
+  left: number;
 };
 
 /** Keep, dismiss with a reason, say it in own words, raise the signal. What it was decided on is kept with it. */
@@ -28,6 +31,8 @@ export function DecisionForm({
   standing,
   decision,
   original,
+  nextId,
+  left,
 }: DecisionFormProps) {
   const start: DecisionState = {
     problems: [],
@@ -59,6 +64,16 @@ export function DecisionForm({
           {standing === 'kept' ? 'Keep as it is now' : 'Keep'}
         </Button>
         <span role="status">{saved && 'Recorded.'}</span>
+        {saved && nextId && (
+          <Link className="button" href={`/inspections/${inspectionId}/findings?show=${encodeURIComponent(nextId)}`}>
+            Next of {left} to decide
+          </Link>
+        )}
+        {saved && !nextId && (
+          <Link className="button" href={`/inspections/${inspectionId}/report`}>
+            All decided. Go to the report
+          </Link>
+        )}
       </div>
       <details open={values.observed !== '' || values.plain !== '' || values.raisedSignal !== ''}>
         <summary className="flex min-h-[44px] items-center font-bold underline">

@@ -10,10 +10,13 @@ type DetailProps = {
   photos: FindingPhoto[];
   timeZone: string;
   mayDecide: boolean;
+  /** The next finding that waits, and how many wait after this one. */
+  nextId?: string;
+  left: number;
 };
 
 /** One finding as the report will say it, with its evidence and what the inspector decides. */
-export function FindingDetail({ inspectionId, shown, photos, timeZone, mayDecide }: DetailProps) {
+export function FindingDetail({ inspectionId, shown, photos, timeZone, mayDecide, nextId, left }: DetailProps) {
   const { finding, signal, urgency, text, decision, standing } = shown;
   const own = photos.filter((photo) => finding.photoIds.includes(photo.id));
   return (
@@ -81,6 +84,8 @@ export function FindingDetail({ inspectionId, shown, photos, timeZone, mayDecide
           readingIds={finding.readingIds}
           signal={finding.signal}
           standing={standing}
+          nextId={nextId}
+          left={left}
           decision={decision}
           original={{ observed: text.observed, plain: text.plain }}
         />

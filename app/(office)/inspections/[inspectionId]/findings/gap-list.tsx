@@ -9,12 +9,19 @@ export function GapList({ gaps }: { gaps: Gap[] }) {
         What stays unproven
       </h2>
       <ul className="limits mt-3 grid gap-2">
-        {gaps.map((gap) => (
-          <li key={gap.id}>
-            <b>{gap.place}:</b> {gap.says}
+        {grouped(gaps).map(({ places, says }) => (
+          <li key={says}>
+            <b>{places.join('; ')}:</b> {says}
           </li>
         ))}
       </ul>
     </section>
   );
+}
+
+/** The same sentence is said once, with all its places. */
+function grouped(gaps: Gap[]): { places: string[]; says: string }[] {
+  const bySentence = new Map<string, string[]>();
+  for (const { place, says } of gaps) bySentence.set(says, [...(bySentence.get(says) ?? []), place]);
+  return Array.from(bySentence, ([says, places]) => ({ places, says }));
 }

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { notFound } from 'next/navigation';
 import { listConflicts } from '@/db/conflicts';
 import { loadFindings } from '@/db/report-findings';
@@ -21,7 +22,15 @@ export default async function FindingsPage({
   if (!id.success || !loaded) notFound();
   const conflicts = await listConflicts(actor, id.data);
   const { show } = await searchParams;
+  // On a phone the list comes first, and a chosen finding takes its place.
+  const isChosen = typeof show === 'string';
   const shown = loaded.findings.find(({ finding }) => finding.id === show) ?? loaded.findings[0];
+  const open = loaded.findings.filter(
+    (one) => one !== shown && (one.standing === 'undecided' || one.standing === 'changed'),
+  );
+  const nextId =
+    open.find((one) => loaded.findings.indexOf(one) > loaded.findings.indexOf(shown ?? one))?.finding.id ??
+    open[0]?.finding.id;
   const mayDecide = actor.roles.includes('inspector') || actor.roles.includes('owner');
 
   return (
@@ -33,20 +42,34 @@ export default async function FindingsPage({
         </p>
       ) : (
         <div className="grid gap-8 lg:grid-cols-[300px_minmax(0,1fr)] lg:gap-12">
-          <FindingsList inspectionId={id.data} findings={loaded.findings} shownId={shown?.finding.id} />
+          <div className={isChosen ? 'max-lg:hidden' : ''}>
+            <FindingsList inspectionId={id.data} findings={loaded.findings} shownId={shown?.finding.id} />
+          </div>
           {shown && (
-            <FindingDetail
-              key={shown.finding.id}
-              inspectionId={id.data}
-              shown={shown}
-              photos={loaded.photos}
-              timeZone={loaded.timeZone}
-              mayDecide={mayDecide}
-            />
+            <div className={isChosen ? '' : 'max-lg:hidden'}>
+              <Link
+                href={`/inspections/${id.data}/findings`}
+                className="mb-4 flex min-h-[44px] items-center underline lg:hidden"
+              >
+                All findings
+              </Link>
+              <FindingDetail
+                key={shown.finding.id}
+                inspectionId={id.data}
+                shown={shown}
+                photos={loaded.photos}
+                timeZone={loaded.timeZone}
+                mayDecide={mayDecide}
+                nextId={nextId}
+                left={open.length}
+              />
+            </div>
           )}
         </div>
       )}
-      <GapList gaps={loaded.gaps} />
+      <div className={isChosen ? 'max-lg:hidden' : ''}>
+        <GapList gaps={loaded.gaps} />
+      </div>
     </div>
   );
 }
