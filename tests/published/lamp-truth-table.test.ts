@@ -13,7 +13,8 @@ type Row = {
   source: string;
 };
 
-const DERIVED = 'derived: 120 V source, equal lamps that strike at 75 V, 10 megohm and 3 kilohm meters, 15 m of flat cable';
+const DERIVED =
+  'derived: 120 V source, equal lamps that strike at 75 V, 10 megohm and 3 kilohm meters, 15 m of flat cable';
 const ON_OFF = 'on/off table and questions of a tester maker, published 2013-01-14; volts derived';
 const SIMULATED = 'derived by simulation';
 const RPBG = 'ecmweb.com "Failures in outlet testing exposed", 2013; volts derived';

@@ -14,8 +14,7 @@ export function runSpice(sources: readonly SpiceSource[], runs: readonly SpiceRu
   const prints: string[] = [];
   for (const [copy, run] of runs.entries()) {
     const node = (name: string) => (name === '0' ? '0' : `${name}_${copy}`);
-    for (const [name, volts, degrees] of sources)
-      lines.push(`V${name}_${copy} ${node(name)} 0 AC ${volts} ${degrees}`);
+    for (const [name, volts, degrees] of sources) lines.push(`V${name}_${copy} ${node(name)} 0 AC ${volts} ${degrees}`);
     for (const [index, [kind, a, b, value]] of run.parts.entries())
       lines.push(`${kind}${copy}_${index} ${node(a)} ${node(b)} ${value}`);
     for (const [index, [a, b]] of run.probes.entries()) {

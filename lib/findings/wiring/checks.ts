@@ -94,7 +94,8 @@ export function outcomeOf(
 
 function leftBy(reading: WiringEvidence): Outcome {
   const read = piecesOf(reading).find((piece) => READINGS.includes(piece.kind));
-  return read ? [...standingUnder(read, reading)].join() : '';
+  if (!read) return '';
+  return [...new Set([...standingUnder(read, reading)].map(({ condition }) => condition))].join();
 }
 
 const READINGS: readonly Piece['kind'][] = ['sensor', 'lamps', 'volts', 'load-test', 'ground-ohms'];

@@ -1,6 +1,7 @@
 import type { VoltTrio, WiringEvidence } from '../facts';
 import type { WiringCondition } from '../vocabulary';
 import { lampsFit, loadsAreOff, trioFits, triosOf } from './fit';
+import type { Hypothesis } from './hypotheses';
 import { hypothesesOf, standingUnder, type Piece } from './pieces';
 
 /**
@@ -21,19 +22,19 @@ export function findConflict(
 }
 
 function disagreement(pieces: readonly Piece[], evidence: WiringEvidence): string {
-  const standing = pieces.map((piece) => ({ piece, conditions: standingUnder(piece, evidence) }));
-  const alone = standing.find(({ conditions }) => conditions.size === 0);
+  const standing = pieces.map((piece) => ({ piece, left: standingUnder(piece, evidence) }));
+  const alone = standing.find(({ left }) => left.size === 0);
   if (alone)
     return `No single fault reads like ${alone.piece.name}. Read it again; if it stays, several faults are present at once.`;
   for (const [index, one] of standing.entries())
     for (const other of standing.slice(index + 1))
-      if (isDisjoint(one.conditions, other.conditions))
+      if (isDisjoint(one.left, other.left))
         return `Two things cannot both be right: ${one.piece.name}; and ${other.piece.name}. Read both again.`;
   return 'No single fault explains all of this together. Read it again; if it stays, several faults are present at once.';
 }
 
-function isDisjoint(a: ReadonlySet<WiringCondition>, b: ReadonlySet<WiringCondition>): boolean {
-  return [...a].every((condition) => !b.has(condition));
+function isDisjoint(a: ReadonlySet<Hypothesis>, b: ReadonlySet<Hypothesis>): boolean {
+  return [...a].every((hypothesis) => !b.has(hypothesis));
 }
 
 /** Is there one wiring, with one set of loads, that shows these lamps and these volts? */

@@ -1,6 +1,7 @@
 import type { WiringCandidate, WiringDiagnosis, WiringEvidence } from '../facts';
-import type { WiringCondition } from '../vocabulary';
+import { WIRING_CONDITIONS, type WiringCondition } from '../vocabulary';
 import { findConflict } from './conflict';
+import type { Hypothesis } from './hypotheses';
 import { MECHANISMS } from './mechanisms';
 import { chooseNextCheck } from './next-check';
 import { listNotProven } from './not-proven';
@@ -17,13 +18,14 @@ export { expectedReadings, type ExpectedReadings, type ReadingOptions } from './
  */
 export function diagnoseWiring(evidence: WiringEvidence): WiringDiagnosis {
   const pieces = piecesOf(evidence);
+  const standing = pieces.map((piece) => ({ piece, left: standingUnder(piece, evidence) }));
   const fitting: WiringCondition[] = [];
   const ruledOut: WiringDiagnosis['ruledOut'] = [];
-  const standing = new Map(pieces.map((piece) => [piece, standingUnder(piece, evidence)]));
-  for (const hypothesis of hypothesesOf(evidence)) {
-    const against = pieces.find((piece) => !standing.get(piece)?.has(hypothesis.condition));
-    if (against) ruledOut.push({ condition: hypothesis.condition, because: against.excludes(hypothesis) });
-    else fitting.push(hypothesis.condition);
+  for (const condition of WIRING_CONDITIONS) {
+    const own = hypothesesOf(evidence).filter((hypothesis) => hypothesis.condition === condition);
+    const left = own.filter((hypothesis) => standing.every((row) => row.left.has(hypothesis)));
+    if (left.length > 0) fitting.push(condition);
+    else ruledOut.push({ condition, because: reasonAgainst(own, standing) });
   }
 
   const candidates = rankCandidates(fitting, evidence).map(explain);
@@ -36,6 +38,18 @@ export function diagnoseWiring(evidence: WiringEvidence): WiringDiagnosis {
     ...(nextCheck ? { nextCheck } : {}),
     ...(conflict ? { conflict } : {}),
   };
+}
+
+/** The first piece that no form of the condition can explain; or that no form explains all of them. */
+function reasonAgainst(
+  own: readonly Hypothesis[],
+  standing: readonly { piece: Piece; left: ReadonlySet<Hypothesis> }[],
+): string {
+  const against = standing.find(({ left }) => !own.some((hypothesis) => left.has(hypothesis)));
+  const [first] = own;
+  return against && first
+    ? against.piece.excludes(first)
+    : 'It could explain the readings one by one, and not all of them together.';
 }
 
 function explain({ condition, standing }: Omit<WiringCandidate, 'because'>): WiringCandidate {

@@ -23,8 +23,8 @@ const SENSOR_LEAST_VOLTS = 20;
 export const SOUND_GROUND_OHMS = 1;
 
 /** Whether any wiring of this hypothesis, with loads on the circuit only where they can be, passes `test`. */
-export function someVariant({ families }: Hypothesis, loadsOff: boolean, test: (variant: Variant) => boolean): boolean {
-  return families.some((family) => family.some((variant) => !(loadsOff && variant.wiring.removable) && test(variant)));
+export function someVariant({ family }: Hypothesis, loadsOff: boolean, test: (variant: Variant) => boolean): boolean {
+  return family.some((variant) => !(loadsOff && variant.wiring.removable) && test(variant));
 }
 
 /**
@@ -48,23 +48,21 @@ export function lampsFit(variant: Variant, lamps: LampPattern, slots: Slots): bo
  * `accept`, only on or beside variants that pass it.
  */
 export function trioFits(
-  { families }: Hypothesis,
+  { family }: Hypothesis,
   trio: VoltTrio,
   slots: Slots,
   loadsOff: boolean,
   accept: (variant: Variant) => boolean = () => true,
 ): boolean {
   const read: Trio = [trio.hn, trio.hg, trio.ng];
-  return families.some((family) => {
-    const standing = loadsOff ? family.filter((variant) => !variant.wiring.removable) : family;
-    return standing.some((variant, index) => {
-      const next = standing[index + 1];
-      if (!accept(variant) && !(next && accept(next))) return false;
-      const here = variant.meterVolts(trio.meter);
-      if (!next) return withinSupply(read, here, slots);
-      const there = next.meterVolts(trio.meter);
-      return BETWEEN.some((step) => withinSupply(read, blend(here, there, step), slots));
-    });
+  const standing = loadsOff ? family.filter((variant) => !variant.wiring.removable) : family;
+  return standing.some((variant, index) => {
+    const next = standing[index + 1];
+    if (!accept(variant) && !(next && accept(next))) return false;
+    const here = variant.meterVolts(trio.meter);
+    if (!next) return withinSupply(read, here, slots);
+    const there = next.meterVolts(trio.meter);
+    return BETWEEN.some((step) => withinSupply(read, blend(here, there, step), slots));
   });
 }
 

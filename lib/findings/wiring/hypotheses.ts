@@ -36,11 +36,10 @@ function loaded(wiring: Wiring, a: 'H' | 'G', b: 'N' | 'H', ohms: readonly numbe
 const ALL_LOADS = SMALL_TO_LARGE_WATTS.map(ohmsOf);
 const GOOD: Wiring = { ties: { H: 'L1', N: 'P', G: 'P' } };
 
-function highResistance(slot: 'H' | 'N'): Family[] {
+/** Without a load the joint carries nothing and reads as wired; loads come and go between two readings. */
+function highResistance(slot: 'H' | 'N'): Family {
   const joint = (ohms: number): Wiring => ({ ...GOOD, joints: { [slot]: ohms } });
-  const underLoad = JOINT_OHMS.map((ohms) => loaded(joint(ohms), 'H', 'N', [HEATER_OHMS]).slice(0, 1)).flat();
-  // Without a load the joint carries nothing and reads as wired.
-  return [JOINT_OHMS.map(joint), underLoad];
+  return [...JOINT_OHMS.map(joint), ...JOINT_OHMS.flatMap((ohms) => loaded(joint(ohms), 'H', 'N', [HEATER_OHMS]))];
 }
 
 function sharedNeutral(seriesOhms: number): Family {
@@ -103,8 +102,8 @@ const FAMILIES_120: Record<WiringCondition, readonly Family[]> = {
   'shared-neutral-open': [sharedNeutral(216), sharedNeutral(5000)],
   'service-neutral-open': [LEG_WATTS.map((legWatts) => ({ ...GOOD, legWatts }))],
   'high-resistance-ground': [[2, 5, 25, 250, 1000, 2500, 5000, 15_000, 50_000].map(groundJoint)],
-  'high-resistance-neutral': highResistance('N'),
-  'high-resistance-hot': highResistance('H'),
+  'high-resistance-neutral': [highResistance('N')],
+  'high-resistance-hot': [highResistance('H')],
   'bootleg-ground-open-neutral': [loaded(ISLAND, 'H', 'N', ALL_LOADS), floating(ISLAND)],
   'open-ground-energized': [
     LEAK_OHMS.map((ohms) => ({ ties: { H: 'L1', N: 'P' }, loads: [{ a: 'H', b: 'G', ohms }] })),
@@ -125,25 +124,25 @@ function groundJoint(ohms: number): Wiring {
   return { ...GOOD, joints: { G: ohms } };
 }
 
-export type Hypothesis = { condition: WiringCondition; families: readonly (readonly Variant[])[] };
+/** One family of one condition on one supply. What explains several readings together explains them within one. */
+export type Hypothesis = { condition: WiringCondition; family: readonly Variant[] };
 
 const built = new Map<string, readonly Hypothesis[]>();
 
 /**
- * One hypothesis per condition, in the vocabulary's order. Where nobody said what the supply is, both kinds are in it.
- * A condition that a receptacle of that voltage cannot have comes with no family.
+ * The hypotheses of every condition, in the vocabulary's order. Where nobody said what the supply is, both kinds are in
+ * it. A condition that a receptacle of that voltage cannot have comes with an empty family.
  */
 export function hypothesesFor(nominal: 120 | 240, supply?: Supply): readonly Hypothesis[] {
   const key = `${nominal} ${supply ?? 'any'}`;
   const known = built.get(key);
   if (known) return known;
   const families = nominal === 240 ? FAMILIES_240 : FAMILIES_120;
-  const made = WIRING_CONDITIONS.map((condition) => ({
-    condition,
-    families: (families[condition] ?? []).flatMap((family) =>
-      suppliesOf(family, supply).map((of) => family.map((wiring) => variantOf(wiring, of))),
+  const made = WIRING_CONDITIONS.flatMap((condition) =>
+    (families[condition] ?? [[]]).flatMap((family) =>
+      suppliesOf(family, supply).map((of) => ({ condition, family: family.map((wiring) => variantOf(wiring, of)) })),
     ),
-  }));
+  );
   built.set(key, made);
   return made;
 }

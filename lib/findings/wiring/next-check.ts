@@ -2,10 +2,10 @@ import type { WiringDiagnosis, WiringEvidence } from '../facts';
 import type { WiringCondition } from '../vocabulary';
 import { CHECK_KINDS, isOpen, outcomeOf, type CheckKind, type Danger, type Outcome } from './checks';
 import { hasMeter, lampsFit, loadsAreOff, sensorFits, trioFitsVariant, triosOf } from './fit';
-import type { Hypothesis } from './hypotheses';
 import { instructionFor } from './instructions';
 import type { Variant } from './instruments';
 import { hypothesesOf } from './pieces';
+import { ranksFor } from './standing';
 
 /** A slot above this against earth is live for whoever touches it. */
 const LIVE_VOLTS = 50;
@@ -26,14 +26,14 @@ export function chooseNextCheck(
   evidence: WiringEvidence,
 ): WiringDiagnosis['nextCheck'] {
   if (fitting.length < 2) return undefined;
-  const danger = dangerOf(fitting, evidence);
-  const rated = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence)).map((kind) => ({
-    kind,
-    ...worthOf(kind, fitting, evidence),
-  }));
+  const left = fitting.map((condition) => ({ condition, variants: variantsLeft(condition, evidence) }));
+  const danger = dangerOf(left, evidence);
+  const rated = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence))
+    .map((kind) => ({ kind, ...worthOf(kind, left, evidence) }))
+    .filter((check) => check.separates.length > 1);
   // Whoever goes on to touch the device or an appliance has to know first whether its metal is live.
   const isDangerous = danger.liveGround || danger.openGround;
-  const sensor = isDangerous ? rated.find((check) => check.kind === 'sensor' && check.separates.length > 0) : undefined;
+  const sensor = isDangerous ? rated.find((check) => check.kind === 'sensor') : undefined;
   const useful = rated.filter((check) => check.gain > LEAST_GAIN_BITS);
   const best = sensor ?? useful.toSorted((a, b) => rankOf(b.gain) - rankOf(a.gain))[0];
   return best && { instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
@@ -44,23 +44,24 @@ function rankOf(gain: number): number {
   return Math.round(gain / EQUAL_GAIN_BITS);
 }
 
+type Left = { condition: WiringCondition; variants: readonly Variant[] };
+
 /** What the candidates that still stand can do to the person who goes on testing. From the model, not from a list. */
-export function dangerOf(fitting: readonly WiringCondition[], evidence: WiringEvidence): Danger {
-  if (evidence.slots === 2) return { liveGround: false, openGround: false };
-  const left = hypothesesOf(evidence)
-    .filter((hypothesis) => fitting.includes(hypothesis.condition))
-    .flatMap((hypothesis) => variantsLeft(hypothesis, evidence));
+function dangerOf(left: readonly Left[], { slots }: WiringEvidence): Danger {
+  if (slots === 2) return { liveGround: false, openGround: false };
   return {
-    liveGround: left.some((variant) => variant.slotPotentials.G >= LIVE_VOLTS),
-    openGround: left.some((variant) => variant.groundOhms >= OPEN_OHMS),
+    liveGround: left.some(({ variants }) => variants.some((variant) => variant.slotPotentials.G >= LIVE_VOLTS)),
+    openGround: left.some(({ variants }) => variants.some((variant) => variant.groundOhms >= OPEN_OHMS)),
   };
 }
 
 /** Variants that agree with the readings; all of a condition's where a reading lies between two of them. */
-function variantsLeft({ families }: Hypothesis, evidence: WiringEvidence): readonly Variant[] {
+function variantsLeft(condition: WiringCondition, evidence: WiringEvidence): readonly Variant[] {
   const { lamps, sensor, slots } = evidence;
   const off = loadsAreOff(evidence);
-  const all = families.flat().filter((variant) => !(off && variant.wiring.removable));
+  const all = hypothesesOf(evidence)
+    .filter((hypothesis) => hypothesis.condition === condition)
+    .flatMap(({ family }) => family.filter((variant) => !(off && variant.wiring.removable)));
   const agreeing = all.filter(
     (variant) =>
       (!lamps || lampsFit(variant, lamps, slots)) &&
@@ -96,15 +97,29 @@ function takesLoad(evidence: WiringEvidence): boolean {
 type Worth = { gain: number; separates: WiringCondition[] };
 type Shares = Map<Outcome, number>;
 
-/** Mutual information in bits between the answer and the condition, every candidate taken as equally likely. */
-function worthOf(kind: CheckKind, fitting: readonly WiringCondition[], evidence: WiringEvidence): Worth {
-  const tables = outcomeTable(kind, evidence);
-  const rows = fitting.map((condition) => ({ condition, shares: tables.get(condition) ?? new Map<Outcome, number>() }));
+/** Mutual information in bits between the answer and the condition; what is met more often weighs more. */
+function worthOf(kind: CheckKind, left: readonly Left[], evidence: WiringEvidence): Worth {
+  const rows = left.map(({ condition, variants }) => ({
+    condition,
+    shares: sharesOf(kind, condition, variants, evidence),
+  }));
+  const weights = weightsOf(left, evidence);
   const overall: Shares = new Map();
-  for (const { shares } of rows)
-    for (const [outcome, share] of shares) overall.set(outcome, (overall.get(outcome) ?? 0) + share / rows.length);
-  const within = rows.reduce((sum, { shares }) => sum + entropy(shares) / rows.length, 0);
+  let within = 0;
+  for (const { condition, shares } of rows) {
+    const weight = weights.get(condition) ?? 0;
+    within += weight * entropy(shares);
+    for (const [outcome, share] of shares) overall.set(outcome, (overall.get(outcome) ?? 0) + weight * share);
+  }
   return { gain: entropy(overall) - within, separates: separatedBy(rows) };
+}
+
+/** Each rank of experience weighs half of the one before; a weight never leaves this file. */
+function weightsOf(left: readonly Left[], evidence: WiringEvidence): Map<WiringCondition, number> {
+  const ranks = ranksFor(evidence);
+  const raw = left.map(({ condition }) => [condition, 2 ** -ranks[condition]] as const);
+  const sum = raw.reduce((total, [, weight]) => total + weight, 0);
+  return new Map(raw.map(([condition, weight]) => [condition, weight / sum]));
 }
 
 function entropy(shares: Shares): number {
@@ -122,32 +137,30 @@ function separatedBy(rows: readonly { condition: WiringCondition; shares: Shares
   return pick((a, b) => a.size !== b.size || [...a.keys()].some((outcome) => !b.has(outcome)));
 }
 
-const tables = new Map<string, Map<WiringCondition, Shares>>();
-
-/** How often each answer comes among the variants of each condition. Worked out once per kind of receptacle. */
-function outcomeTable(kind: CheckKind, evidence: WiringEvidence): Map<WiringCondition, Shares> {
-  const key = tableKey(kind, evidence);
-  const known = tables.get(key);
-  if (known) return known;
-  const hypotheses = hypothesesOf(evidence).filter(({ families }) => families.length > 0);
-  const off = loadsAreOff(evidence);
-  const table = new Map(
-    hypotheses.map(({ condition, families }) => {
-      const standing = families.flat().filter((variant) => !(off && variant.wiring.removable));
-      const shares: Shares = new Map();
-      for (const variant of standing) {
-        const outcome = outcomeOf(kind, variant, condition, evidence);
-        shares.set(outcome, (shares.get(outcome) ?? 0) + 1 / standing.length);
-      }
-      return [condition, shares];
-    }),
-  );
-  tables.set(key, table);
-  return table;
+/** How often each answer comes among the variants that are left of a condition. */
+function sharesOf(
+  kind: CheckKind,
+  condition: WiringCondition,
+  variants: readonly Variant[],
+  evidence: WiringEvidence,
+): Shares {
+  const key = `${condition} ${contextOf(kind, evidence)}`;
+  const shares: Shares = new Map();
+  for (const variant of variants) {
+    const known = outcomes.get(variant) ?? new Map<string, Outcome>();
+    outcomes.set(variant, known);
+    const outcome = known.get(key) ?? outcomeOf(kind, variant, condition, evidence);
+    known.set(key, outcome);
+    shares.set(outcome, (shares.get(outcome) ?? 0) + 1 / variants.length);
+  }
+  return shares;
 }
 
-function tableKey(kind: CheckKind, evidence: WiringEvidence): string {
+/** Worked out once for each variant and kind of receptacle; neither ever changes. */
+const outcomes = new WeakMap<Variant, Map<string, Outcome>>();
+
+function contextOf(kind: CheckKind, evidence: WiringEvidence): string {
   const { slots, nominalVolts = 120, supply, nearBondedPanel, sharedNeutral } = evidence;
-  const context = kind === 'load-test' ? `${nearBondedPanel} ${sharedNeutral}` : '';
-  return `${kind} ${slots} ${nominalVolts} ${supply} ${loadsAreOff(evidence)} ${context}`;
+  const circuit = kind === 'load-test' ? `${nearBondedPanel} ${sharedNeutral}` : '';
+  return `${kind} ${slots} ${nominalVolts} ${supply} ${loadsAreOff(evidence)} ${circuit}`;
 }

@@ -69,19 +69,18 @@ export function hypothesesOf({ nominalVolts = 120, supply }: WiringEvidence): re
 }
 
 const MOST_KEPT = 4000;
-const kept = new Map<string, ReadonlySet<WiringCondition>>();
+const kept = new Map<string, ReadonlySet<Hypothesis>>();
 
-/** The conditions that a piece leaves standing. Remembered: the same readings come again and again in a house. */
-export function standingUnder(piece: Piece, evidence: WiringEvidence): ReadonlySet<WiringCondition> {
+/** The hypotheses that a piece leaves standing. Remembered: the same readings come again and again in a house. */
+export function standingUnder(piece: Piece, evidence: WiringEvidence): ReadonlySet<Hypothesis> {
   const { slots, nominalVolts = 120, supply } = evidence;
   const key = `${slots} ${nominalVolts} ${supply} ${loadsAreOff(evidence)} ${piece.kind} ${piece.key}`;
   const known = kept.get(key);
   if (known) return known;
-  const standing = hypothesesOf(evidence).filter((hypothesis) => piece.fits(hypothesis));
-  const conditions = new Set(standing.map(({ condition }) => condition));
+  const standing = new Set(hypothesesOf(evidence).filter((hypothesis) => piece.fits(hypothesis)));
   if (kept.size >= MOST_KEPT) kept.clear();
-  kept.set(key, conditions);
-  return conditions;
+  kept.set(key, standing);
+  return standing;
 }
 
 function facePiece({ slots, nominalVolts }: WiringEvidence): Piece {
@@ -90,7 +89,7 @@ function facePiece({ slots, nominalVolts }: WiringEvidence): Piece {
     kind: 'face',
     key: '',
     name: slots === 2 ? 'a two-slot face' : 'the face',
-    fits: ({ condition, families }) => families.length > 0 && !noGround(condition),
+    fits: ({ condition, family }) => family.length > 0 && !noGround(condition),
     excludes: ({ condition }) => {
       if (noGround(condition)) return 'A two-slot receptacle has no ground slot.';
       return nominalVolts === 240

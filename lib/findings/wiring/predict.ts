@@ -86,15 +86,9 @@ function typicalWiring(condition: WiringCondition, options: ReadingOptions): Wir
 }
 
 /** The variant of the plain cable, without other coupling; else the first. */
-function nominalOf({ families }: Hypothesis, loadsOff = false): Variant | undefined {
-  let first: Variant | undefined;
-  for (const family of families)
-    for (const variant of family) {
-      if (loadsOff && variant.wiring.removable) continue;
-      if (!variant.wiring.stray) return variant;
-      first ??= variant;
-    }
-  return first ?? families[0]?.[0];
+function nominalOf({ family }: Hypothesis, loadsOff = false): Variant | undefined {
+  const standing = loadsOff ? family.filter((variant) => !variant.wiring.removable) : family;
+  return standing.find((variant) => !variant.wiring.stray) ?? standing[0] ?? family[0];
 }
 
 function lampsOf(variant: Variant): LampPattern {

@@ -1,6 +1,6 @@
 import type { WiringEvidence } from '../facts';
 import { assessLoadTest, type LoadAssessment } from '../supply/load-test';
-import type { WiringCondition } from '../vocabulary';
+import { WIRING_CONDITIONS, type WiringCondition } from '../vocabulary';
 import { lampsFit, loadsAreOff, SOUND_GROUND_OHMS, sensorSays, someVariant, triosOf } from './fit';
 import { hypothesesOf, vocabularyOrder } from './pieces';
 
@@ -54,7 +54,8 @@ export function rankCandidates(
     .map((condition) => ({ condition, standing: ranks[condition] - best < SAME_RANK ? 'leading' : 'possible' }));
 }
 
-function ranksFor(evidence: WiringEvidence): Record<WiringCondition, number> {
+/** The rank of every condition with what is known of the house, the circuit and the tests; the least is met most. */
+export function ranksFor(evidence: WiringEvidence): Record<WiringCondition, number> {
   const ranks = { ...USUAL_RANK };
   const raise = (...conditions: WiringCondition[]) => {
     for (const condition of conditions) ranks[condition] = 1;
@@ -84,15 +85,21 @@ function rankByDimLamps(ranks: Record<WiringCondition, number>, evidence: Wiring
   const dim = [lamps.hn, lamps.hg, lamps.ng].map((lamp) => lamp === 'dim').slice(0, slots === 2 ? 1 : 3);
   if (!dim.includes(true)) return;
   const glows = (volts: number) => volts > DIM_VOLTS[0] && volts < DIM_VOLTS[1];
-  for (const hypothesis of hypothesesOf(evidence)) {
-    const explains = someVariant(
-      hypothesis,
-      loadsAreOff(evidence),
-      (variant) =>
-        lampsFit(variant, lamps, slots) && variant.lampVolts.every((volts, index) => !dim[index] || glows(volts)),
-    );
-    if (!explains) ranks[hypothesis.condition] += 2;
-  }
+  const off = loadsAreOff(evidence);
+  const explaining = new Set(
+    hypothesesOf(evidence)
+      .filter((hypothesis) =>
+        someVariant(
+          hypothesis,
+          off,
+          (variant) =>
+            lampsFit(variant, lamps, slots) && variant.lampVolts.every((volts, index) => !dim[index] || glows(volts)),
+        ),
+      )
+      .map(({ condition }) => condition),
+  );
+  for (const condition of WIRING_CONDITIONS)
+    if (!explaining.has(condition)) ranks[condition] += condition === 'correct' ? 3 : 2;
 }
 
 function rankByLoadTest(
