@@ -6,7 +6,6 @@ import type { Transaction } from './with-actor';
 export type Jobs = {
   'render-report': { firmId: string; reportVersionId: string; locale: 'en' | 'es' };
   'send-mail': MailJob;
-  'derive-photo': { firmId: string; photoId: string };
 };
 
 export type MailJob =

@@ -3,7 +3,7 @@ import { bitsOf } from '@/lib/findings/evidence';
 import type { InspectionFacts } from '@/lib/findings/facts';
 import { buildWorld, compareText, type Point } from '@/lib/findings/points';
 import { SKIP_WORDS } from '@/lib/findings/wording/skip-words';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { SnapshotFinding, SnapshotLogRow } from '@/lib/schemas/snapshot';
 
 /** The log: every receptacle that was listed, in walking order, with what was read there and nothing more. */
@@ -40,30 +40,30 @@ export function reportLog(facts: InspectionFacts, findings: SnapshotFinding[]): 
 }
 
 function absentWords(presence: 'present' | 'not-present' | 'removed'): string {
-  return presence === 'removed' ? enReport.log.removed : enReport.log.notPresent;
+  return presence === 'removed' ? en.report.log.removed : en.report.log.notPresent;
 }
 
 /** A pattern that several faults share is said as what it most often is; lamps that read correct prove no ground. */
 function resultWords(point: Point): string {
-  if (point.evidence.conflicts.length > 0) return enReport.conflict;
+  if (point.evidence.conflicts.length > 0) return en.report.conflict;
   const diagnosis = point.diagnoses[0]?.diagnosis;
   const leading = diagnosis?.candidates.filter((candidate) => candidate.standing === 'leading') ?? [];
   const [first] = leading;
   if (!diagnosis || !first) {
-    if (diagnosis?.conflict) return enReport.conflict;
-    return point.skip ? `${enReport.log.notTested}: ${SKIP_WORDS[point.skip.reason]}` : enReport.log.notTested;
+    if (diagnosis?.conflict) return en.report.conflict;
+    return point.skip ? `${en.report.log.notTested}: ${SKIP_WORDS[point.skip.reason]}` : en.report.log.notTested;
   }
-  const words = [...new Set(leading.map((candidate) => enReport.condition[candidate.condition]))].join(' or ');
+  const words = [...new Set(leading.map((candidate) => en.report.condition[candidate.condition]))].join(' or ');
   if (leading.every((candidate) => candidate.condition === 'correct')) return words;
   const { lamps } = point.evidence.variants[0] ?? {};
-  if (lamps && bitsOf(lamps) === '110') return enReport.correctUnproven;
-  return diagnosis.candidates.length > 1 ? enReport.mostOften(words) : words;
+  if (lamps && bitsOf(lamps) === '110') return en.report.correctUnproven;
+  return diagnosis.candidates.length > 1 ? en.report.mostOften(words) : words;
 }
 
 function protectionWords(point: Point): string {
   const gfci = point.gfci.at(-1)?.assessment.verdict;
   const afci = point.afci.at(-1)?.assessment.verdict;
-  const own = [gfci ? enReport.gfci[gfci] : '', afci ? enReport.afci[afci] : ''].filter(Boolean).join('; ');
+  const own = [gfci ? en.report.gfci[gfci] : '', afci ? en.report.afci[afci] : ''].filter(Boolean).join('; ');
   if (own) return own;
-  return point.protection.state === 'yes' ? enReport.protectedBy(point.protection.by) : '';
+  return point.protection.state === 'yes' ? en.report.protectedBy(point.protection.by) : '';
 }

@@ -3,7 +3,7 @@
 CREATE FUNCTION enqueue_job(task text, payload json, job_key text DEFAULT NULL, queue text DEFAULT NULL) RETURNS void
 LANGUAGE plpgsql SECURITY DEFINER SET search_path = public, pg_temp AS $$
 BEGIN
-  IF task NOT IN ('render-report', 'send-mail', 'derive-photo') THEN
+  IF task NOT IN ('render-report', 'send-mail') THEN
     RAISE EXCEPTION 'there is no task %', task;
   END IF;
   IF (payload ->> 'firmId') IS NOT NULL AND (payload ->> 'firmId')::uuid IS DISTINCT FROM app_firm() THEN

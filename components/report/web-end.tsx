@@ -1,6 +1,6 @@
 import { Facts } from '@/components/ui/facts';
 import { dateTimeIn } from '@/lib/messages/dates';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { ReportSnapshot } from '@/lib/schemas/snapshot';
 import { signatureFacts } from './report-facts';
 import { WebHeading } from './web-heading';
@@ -11,9 +11,9 @@ type Part = { snapshot: ReportSnapshot };
 export function WebGaps({ snapshot: { gaps } }: Part) {
   return (
     <section aria-labelledby="gaps">
-      <WebHeading id="gaps">{enReport.gaps.title}</WebHeading>
+      <WebHeading id="gaps">{en.report.gaps.title}</WebHeading>
       <p className="mb-2 max-w-[62ch] font-serif leading-relaxed">
-        {gaps.length > 0 ? enReport.gaps.lead : enReport.gaps.none}
+        {gaps.length > 0 ? en.report.gaps.lead : en.report.gaps.none}
       </p>
       <Facts facts={gaps.map(({ place, says }) => ({ term: place, value: says.en }))} />
     </section>
@@ -23,15 +23,15 @@ export function WebGaps({ snapshot: { gaps } }: Part) {
 export function WebNotTested({ snapshot: { notTested } }: Part) {
   return (
     <section aria-labelledby="not-tested">
-      <WebHeading id="not-tested">{enReport.skipped.title}</WebHeading>
-      {notTested.length === 0 && <p>{enReport.skipped.none}</p>}
+      <WebHeading id="not-tested">{en.report.skipped.title}</WebHeading>
+      {notTested.length === 0 && <p>{en.report.skipped.none}</p>}
       <Facts facts={notTested.map(({ place, says, note }) => ({ term: place, value: says.en, source: note }))} />
     </section>
   );
 }
 
 export function WebCoverage({ snapshot: { coverage } }: Part) {
-  const { skipped } = enReport;
+  const { skipped } = en.report;
   return (
     <section aria-labelledby="coverage">
       <WebHeading id="coverage">{skipped.coverage}</WebHeading>
@@ -59,7 +59,7 @@ export function WebCoverage({ snapshot: { coverage } }: Part) {
 export function WebLimits({ snapshot: { limits } }: Part) {
   return (
     <section aria-labelledby="limits">
-      <WebHeading id="limits">{enReport.limits.title}</WebHeading>
+      <WebHeading id="limits">{en.report.limits.title}</WebHeading>
       <ul className="grid max-w-[62ch] list-disc gap-2 pl-5 font-serif leading-relaxed">
         {limits.en.map((line) => (
           <li key={line}>{line}</li>
@@ -71,15 +71,15 @@ export function WebLimits({ snapshot: { limits } }: Part) {
 
 export function WebSignature({ snapshot, sha256 }: Part & { sha256: string }) {
   const { signature, inspection } = snapshot;
-  const license = signature.licenseNumber ? `, ${enReport.license(signature.licenseNumber)}` : '';
+  const license = signature.licenseNumber ? `, ${en.report.license(signature.licenseNumber)}` : '';
   const when = dateTimeIn(inspection.timeZone, signature.signedAt);
   return (
     <section aria-labelledby="signature">
-      <WebHeading id="signature">{enReport.signature.title}</WebHeading>
+      <WebHeading id="signature">{en.report.signature.title}</WebHeading>
       <p className="my-3 font-serif text-xl italic">{signature.name}</p>
-      <p className="mb-3 text-ink-2">{enReport.signature.signed(`${signature.name}${license}`, when)}</p>
-      <Facts facts={signatureFacts(snapshot, sha256, enReport).map(([term, value]) => ({ term, value }))} />
-      <p className="mt-2 text-s text-ink-2">{enReport.signature.record}</p>
+      <p className="mb-3 text-ink-2">{en.report.signature.signed(`${signature.name}${license}`, when)}</p>
+      <Facts facts={signatureFacts(snapshot, sha256, en.report).map(([term, value]) => ({ term, value }))} />
+      <p className="mt-2 text-s text-ink-2">{en.report.signature.record}</p>
     </section>
   );
 }

@@ -2,7 +2,7 @@ import Image from 'next/image';
 import { ReceptacleDrawing } from '@/components/drawings/receptacle-drawing';
 import { HazardWord } from '@/components/findings/hazard-word';
 import { timeIn } from '@/lib/messages/dates';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { ReportSnapshot, SnapshotFinding } from '@/lib/schemas/snapshot';
 import { readingWords, wiresWords } from './report-drawing-words';
 import { anchorOf, headline } from './report-facts';
@@ -14,13 +14,13 @@ type WebFindingProps = { finding: SnapshotFinding; snapshot: ReportSnapshot; pho
 /** One finding: what was read, what it most often means, what the danger is, and what none of it proves. */
 export function WebFinding({ finding, snapshot, photoSrc }: WebFindingProps) {
   const text = finding.text.en;
-  const words = enReport.finding;
+  const words = en.report.finding;
   return (
     <section aria-labelledby={anchorOf(finding)} className="grid gap-5 print:break-before-page">
       <div>
         <p className="flex flex-wrap items-center gap-3">
           <HazardWord signal={finding.signal} />
-          <span className="font-serif text-l font-bold">{enReport.urgency[finding.urgency]}</span>
+          <span className="font-serif text-l font-bold">{en.report.urgency[finding.urgency]}</span>
         </p>
         <h3 id={anchorOf(finding)} className="mt-3 font-serif text-xl font-bold">
           {headline(finding, text.title)}
@@ -55,7 +55,7 @@ function Drawings({ finding: { drawing } }: { finding: SnapshotFinding }) {
       <figure className="w-52 text-center">
         <WebReading drawing={drawing} size={176} />
         <figcaption className="mt-2 text-s">
-          <b className="block">{enReport.finding.read}</b>
+          <b className="block">{en.report.finding.read}</b>
           {readingWords(drawing)}
         </figcaption>
       </figure>
@@ -63,8 +63,8 @@ function Drawings({ finding: { drawing } }: { finding: SnapshotFinding }) {
         <figure className="w-52 text-center">
           <ReceptacleDrawing view="wiring" pattern={drawing.pattern} condition={drawing.condition} size={212} />
           <figcaption className="mt-2 text-s">
-            <b className="block">{enReport.finding.means}</b>
-            {wiresWords(drawing, enReport)}
+            <b className="block">{en.report.finding.means}</b>
+            {wiresWords(drawing, en.report)}
           </figcaption>
         </figure>
       )}
@@ -74,7 +74,7 @@ function Drawings({ finding: { drawing } }: { finding: SnapshotFinding }) {
 
 function HazardParts({ finding }: { finding: SnapshotFinding }) {
   const { hazard, who } = finding.text.en;
-  const words = enReport.finding;
+  const words = en.report.finding;
   const parts = [
     [words.danger, hazard.type],
     [words.does, hazard.consequence],
@@ -99,17 +99,17 @@ function HazardParts({ finding }: { finding: SnapshotFinding }) {
 function Evidence({ finding, timeZone }: { finding: SnapshotFinding; timeZone: string }) {
   const told = finding.told.map(({ at, whom, note }) => ({
     at,
-    instrument: enReport.finding.told,
+    instrument: en.report.finding.told,
     showed: [whom, note].filter(Boolean).join('. '),
   }));
   return (
     <table className="w-full text-left">
-      <caption className="text-left font-bold">{enReport.finding.evidence}</caption>
+      <caption className="text-left font-bold">{en.report.finding.evidence}</caption>
       <thead className="sr-only">
         <tr>
-          <th scope="col">{enReport.web.time}</th>
-          <th scope="col">{enReport.web.instrument}</th>
-          <th scope="col">{enReport.web.showed}</th>
+          <th scope="col">{en.report.web.time}</th>
+          <th scope="col">{en.report.web.instrument}</th>
+          <th scope="col">{en.report.web.showed}</th>
         </tr>
       </thead>
       <tbody>
@@ -139,7 +139,7 @@ export function WebPhotos({ photoIds, snapshot, photoSrc }: WebPhotosProps) {
               <Image
                 unoptimized
                 src={photoSrc(photo.id, '1600')}
-                alt={photo.caption || enReport.web.photoOf(photo.number, photo.place)}
+                alt={photo.caption || en.report.web.photoOf(photo.number, photo.place)}
                 width={photo.width ?? 1600}
                 height={photo.height ?? 1200}
                 className="h-auto w-full border border-hairline"
@@ -147,7 +147,7 @@ export function WebPhotos({ photoIds, snapshot, photoSrc }: WebPhotosProps) {
             </a>
             <figcaption className="mt-1 text-s">
               <b>
-                {enReport.finding.photo(photo.number)}
+                {en.report.finding.photo(photo.number)}
                 {photo.takenAt && `, ${timeIn(snapshot.inspection.timeZone, photo.takenAt)}`}
               </b>
               {photo.caption && `. ${photo.caption}`}

@@ -1,6 +1,6 @@
 import { ReceptacleDrawing } from '@/components/drawings/receptacle-drawing';
 import { HazardWord } from '@/components/findings/hazard-word';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { SnapshotFinding } from '@/lib/schemas/snapshot';
 import { anchorOf } from './report-facts';
 import { WebHeading } from './web-heading';
@@ -19,12 +19,12 @@ export function WebFirst({ findings }: { findings: SnapshotFinding[] }) {
             <p>
               <HazardWord signal={finding.signal} small />
             </p>
-            <p className="mt-2 font-serif text-l font-bold">{enReport.urgency[finding.urgency]}</p>
+            <p className="mt-2 font-serif text-l font-bold">{en.report.urgency[finding.urgency]}</p>
             <p className="font-bold">{finding.place}</p>
             <p className="mt-2 max-w-[62ch] font-serif leading-relaxed">{finding.text.en.plain}</p>
             <p className="mt-2 text-s print:hidden">
               <a className="inline-flex min-h-[44px] items-center" href={`#${anchorOf(finding)}`}>
-                {enReport.web.readMore}
+                {en.report.web.readMore}
                 <span className="sr-only">: {finding.place}</span>
               </a>
             </p>
@@ -38,12 +38,12 @@ export function WebFirst({ findings }: { findings: SnapshotFinding[] }) {
 export function WebLater({ findings }: { findings: SnapshotFinding[] }) {
   return (
     <section aria-labelledby="later">
-      <WebHeading id="later">{enReport.first.later}</WebHeading>
+      <WebHeading id="later">{en.report.first.later}</WebHeading>
       <ul>
         {findings.map((finding) => (
           <li key={finding.id} className="border-b border-hairline">
             <a className="block py-3 no-underline hover:underline" href={`#${anchorOf(finding)}`}>
-              <HazardWord signal={finding.signal} small /> <b>{enReport.urgency[finding.urgency]}.</b> {finding.place}:{' '}
+              <HazardWord signal={finding.signal} small /> <b>{en.report.urgency[finding.urgency]}.</b> {finding.place}:{' '}
               {finding.text.en.title}
             </a>
           </li>

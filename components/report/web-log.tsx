@@ -1,4 +1,4 @@
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { Lamp } from '@/lib/findings/vocabulary';
 import type { ReportSnapshot, SnapshotLogRow } from '@/lib/schemas/snapshot';
 import { anchorOf } from './report-facts';
@@ -8,7 +8,7 @@ const cell = 'py-2 pr-3 align-top';
 
 /** Every receptacle with what was read there. The lamps are drawn and said. */
 export function WebLog({ snapshot }: { snapshot: ReportSnapshot }) {
-  const { log } = enReport;
+  const { log } = en.report;
   const names = new Map(snapshot.coverage.areas.map((area) => [area.areaId, area.name]));
   const heads = [log.area, log.number, log.place, log.device, log.lamps, log.volts, log.protection, log.result];
   return (
@@ -44,7 +44,7 @@ function LogRow({ row, area }: { row: SnapshotLogRow; area: string }) {
       <td className={`${cell} font-bold`}>{area}</td>
       <td className={cell}>{row.number}</td>
       <td className={cell}>{row.label}</td>
-      <td className={cell}>{[row.pattern, enReport.device[row.device]].filter(Boolean).join(' ')}</td>
+      <td className={cell}>{[row.pattern, en.report.device[row.device]].filter(Boolean).join(' ')}</td>
       <td className={`${cell} whitespace-nowrap`}>{row.lamps && <Beads row={row} />}</td>
       <td className={`${cell} whitespace-nowrap`}>
         {row.volts && `${row.volts.hn} / ${row.volts.hg} / ${row.volts.ng}`}
@@ -54,7 +54,7 @@ function LogRow({ row, area }: { row: SnapshotLogRow; area: string }) {
         {row.result.en}{' '}
         {row.findings.map((number) => (
           <a key={number} className="font-bold whitespace-nowrap" href={`#${anchorOf({ number })}`}>
-            {enReport.log.finding([number])}{' '}
+            {en.report.log.finding([number])}{' '}
           </a>
         ))}
       </td>
@@ -91,7 +91,7 @@ function Bead({ lamp = 'off' }: { lamp?: Lamp }) {
 
 /** What hangs from which breaker. */
 export function WebCircuits({ snapshot }: { snapshot: ReportSnapshot }) {
-  const { circuits } = enReport;
+  const { circuits } = en.report;
   if (snapshot.circuits.length === 0) return null;
   const heads = [circuits.breaker, circuits.label, circuits.feeds, circuits.protection];
   const panels = new Map(snapshot.panels.map((panel) => [panel.id, panel.name]));
@@ -130,7 +130,7 @@ export function WebCircuits({ snapshot }: { snapshot: ReportSnapshot }) {
                         </span>
                       ))}
                 </td>
-                <td className={cell}>{enReport.breaker[circuit.protection]}</td>
+                <td className={cell}>{en.report.breaker[circuit.protection]}</td>
               </tr>
             ))}
           </tbody>

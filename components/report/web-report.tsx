@@ -1,4 +1,4 @@
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import { dayIn } from '@/lib/messages/dates';
 import type { ReportSnapshot } from '@/lib/schemas/snapshot';
 import { Facts } from '@/components/ui/facts';
@@ -31,16 +31,16 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
           {inspection.street}, {inspection.cityLine} · {dayIn(inspection.timeZone, inspection.scheduledAt)} ·{' '}
           {snapshot.firm.name}
         </p>
-        <h1 className="mt-2 font-serif text-2xl font-bold sm:text-3xl">{enReport.first.title}</h1>
+        <h1 className="mt-2 font-serif text-2xl font-bold sm:text-3xl">{en.report.first.title}</h1>
         <p className="mt-4 max-w-[62ch] font-serif text-m leading-relaxed">
-          {findings.length > 0 ? enReport.first.lead(now, days, rest) : enReport.first.nothing}
+          {findings.length > 0 ? en.report.first.lead(now, days, rest) : en.report.first.nothing}
         </p>
       </header>
       {first.length > 0 && <WebFirst findings={first} />}
       {later.length > 0 && <WebLater findings={later} />}
       <WebUnknown snapshot={snapshot} />
       <section aria-labelledby="findings" className="grid gap-16">
-        <WebHeading id="findings">{enReport.web.findings}</WebHeading>
+        <WebHeading id="findings">{en.report.web.findings}</WebHeading>
         {findings.map((finding) => (
           <WebFinding key={finding.id} finding={finding} snapshot={snapshot} photoSrc={photoSrc} />
         ))}
@@ -49,7 +49,7 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
       <WebLog snapshot={snapshot} />
       {others.length > 0 && (
         <section aria-labelledby="photos">
-          <WebHeading id="photos">{enReport.log.photos}</WebHeading>
+          <WebHeading id="photos">{en.report.log.photos}</WebHeading>
           <WebPhotos photoIds={others} snapshot={snapshot} photoSrc={photoSrc} />
         </section>
       )}
@@ -58,8 +58,8 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
       <WebCoverage snapshot={snapshot} />
       <WebLimits snapshot={snapshot} />
       <section aria-labelledby="house">
-        <WebHeading id="house">{enReport.web.house}</WebHeading>
-        <Facts facts={coverFacts(snapshot, enReport).map(([term, value]) => ({ term, value }))} />
+        <WebHeading id="house">{en.report.web.house}</WebHeading>
+        <Facts facts={coverFacts(snapshot, en.report).map(([term, value]) => ({ term, value }))} />
       </section>
       <WebSignature snapshot={snapshot} sha256={sha256} />
     </article>
@@ -71,14 +71,14 @@ function WebUnknown({ snapshot }: { snapshot: ReportSnapshot }) {
   const { coverage, gaps } = snapshot;
   const untested = coverage.present - coverage.tested;
   const lines = [
-    ...(untested > 0 ? [enReport.web.untested(untested)] : []),
-    ...(gaps.length > 0 ? [enReport.web.unproven(gaps.length)] : []),
-    ...enReport.web.always,
+    ...(untested > 0 ? [en.report.web.untested(untested)] : []),
+    ...(gaps.length > 0 ? [en.report.web.unproven(gaps.length)] : []),
+    ...en.report.web.always,
   ];
   return (
     <section aria-labelledby="unknown" className="border-l-[3px] border-double border-rule pl-4">
       <h2 id="unknown" className="font-serif text-l font-bold">
-        {enReport.web.unknown}
+        {en.report.web.unknown}
       </h2>
       <ul className="mt-2 grid max-w-[62ch] list-disc gap-1 pl-5 font-serif leading-relaxed">
         {lines.map((line) => (
@@ -86,9 +86,9 @@ function WebUnknown({ snapshot }: { snapshot: ReportSnapshot }) {
         ))}
       </ul>
       <p className="mt-3 flex flex-wrap gap-x-6 gap-y-1 text-s print:hidden">
-        <a href="#gaps">{enReport.gaps.title}</a>
-        <a href="#not-tested">{enReport.skipped.title}</a>
-        <a href="#limits">{enReport.limits.title}</a>
+        <a href="#gaps">{en.report.gaps.title}</a>
+        <a href="#not-tested">{en.report.skipped.title}</a>
+        <a href="#limits">{en.report.limits.title}</a>
       </p>
     </section>
   );

@@ -137,6 +137,9 @@ function mergeGroup(id: string, members: RawFinding[], world: World): Finding {
   };
 }
 
+/** Absent protection and kinds of device, merged over a structure. */
+const HOUSE_MATTERS: readonly string[] = ['A02', 'T01', 'T03', 'T04'];
+
 /** Sets are written gravest first. */
 function gravest<Value>(order: readonly Value[], values: Value[]): Value {
   const found = order.find((value) => values.includes(value));
@@ -209,7 +212,9 @@ function agreed(members: RawFinding[], name: string): string {
   return others.length > 0 ? 'mixed' : (value ?? '');
 }
 
+/** A matter of the whole house shows no photo of one receptacle, which is there for something else. */
 function photosOf(raw: RawFinding, points: Point[], world: World): string[] {
+  if (raw.wholeHouse || HOUSE_MATTERS.includes(raw.code)) return [];
   const ids = new Set(points.map((point) => point.receptacle.id));
   return [...world.facts.photos]
     .filter((photo) =>

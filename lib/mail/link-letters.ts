@@ -1,5 +1,5 @@
 import type { MailJob } from '@/db/jobs';
-import { enMail } from '@/lib/messages/en-mail';
+import { en } from '@/lib/messages/en';
 import type { Letter } from './letter';
 
 type LinkJob = Extract<MailJob, { kind: 'invitation' | 'reset' | 'sign-in' }>;
@@ -10,11 +10,11 @@ export function linkLetter(job: LinkJob, openAddress: string): Letter {
   return {
     subject,
     parts: [
-      { kind: 'text', text: enMail.hello(job.name) },
+      { kind: 'text', text: en.mail.hello(job.name) },
       { kind: 'text', text: says },
       { kind: 'button', label: button, href: job.link },
-      { kind: 'small', text: enMail.code(openAddress, job.code) },
-      { kind: 'small', text: enMail.notYours },
+      { kind: 'small', text: en.mail.code(openAddress, job.code) },
+      { kind: 'small', text: en.mail.notYours },
     ],
   };
 }
@@ -22,13 +22,13 @@ export function linkLetter(job: LinkJob, openAddress: string): Letter {
 function wordsOf({ kind, firmName }: LinkJob): { subject: string; says: string; button: string } {
   switch (kind) {
     case 'invitation': {
-      const { subject, says, button } = enMail.invitation;
+      const { subject, says, button } = en.mail.invitation;
       const firm = firmName ?? 'A firm';
       return { subject: subject(firm), says: says(firm), button };
     }
     case 'reset':
-      return enMail.reset;
+      return en.mail.reset;
     case 'sign-in':
-      return enMail.signIn;
+      return en.mail.signIn;
   }
 }

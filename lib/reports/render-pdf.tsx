@@ -1,6 +1,6 @@
 import { renderToBuffer } from '@react-pdf/renderer';
 import type { Locale } from '@/lib/findings/vocabulary';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { ReportSnapshot } from '@/lib/schemas/snapshot';
 import { ReportDocument } from '@/components/report/report-document';
 import { registerFonts } from '@/components/report/report-fonts';
@@ -21,7 +21,7 @@ export async function renderReportPdf(
 ): Promise<{ pdf: Buffer; pages: number }> {
   registerFonts();
   let pages = 0;
-  const print = { snapshot, sha256, locale, messages: enReport, ...assets, pages: new Map<string, number>() };
+  const print = { snapshot, sha256, locale, messages: en.report, ...assets, pages: new Map<string, number>() };
   const pdf = await renderToBuffer(<ReportDocument print={print} />);
   pages = countPages(pdf);
   return { pdf, pages };

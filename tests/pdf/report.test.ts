@@ -6,7 +6,7 @@ import { promisify } from 'node:util';
 import { build } from 'esbuild';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { findForbiddenWords } from '@/lib/findings/wording/forbidden-words';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import { renderReportPdf } from '@/lib/reports/render-pdf';
 import { goldenSnapshot, hash } from '../support/snapshot';
 
@@ -53,7 +53,7 @@ describe('the printed report says what the snapshot says', () => {
     for (const line of [...limits.en, ...coverage.leftOff]) expect(text).toContain(flat(line));
     expect(text).toContain(overrides[0]?.reason);
     expect(text).toContain(
-      enReport.signature.signed(`${signature.name}, license 5550`, 'December 1, 2026, 5:05 PM EST'),
+      en.report.signature.signed(`${signature.name}, license 5550`, 'December 1, 2026, 5:05 PM EST'),
     );
     expect(bare).toContain(golden.sha256);
   });
@@ -73,7 +73,7 @@ describe('its pages', () => {
     const { stdout } = await run('pdfinfo', [file]);
     expect(stdout).toMatch(new RegExp(`Pages:\\s+${pages}\\b`));
     expect(stdout).toContain('612 x 792 pts (letter)');
-    expect(stdout).toContain(enReport.title('418 Penstemon Road, Alder Falls, NY 12000'));
+    expect(stdout).toContain(en.report.title('418 Penstemon Road, Alder Falls, NY 12000'));
     for (let page = 1; page <= pages; page++) {
       const words = onPage(page);
       expect(words).toContain('Harrow Lane Home Inspection · 12 Harrow Lane, Alder Falls, NY 12000');
@@ -85,20 +85,20 @@ describe('its pages', () => {
 
   test('start with what to do first, and each link there prints the page it goes to', () => {
     const first = onPage(2);
-    expect(first).toContain(enReport.first.title);
+    expect(first).toContain(en.report.first.title);
     const numbers = [...first.matchAll(/page (\d+)/g)].map(([, number]) => Number(number));
     expect(numbers).toHaveLength(golden.snapshot.findings.length + 3);
     golden.snapshot.findings.forEach((finding, index) => {
-      expect(onPage(numbers[index] ?? 0)).toContain(enReport.finding.heading(finding.number));
+      expect(onPage(numbers[index] ?? 0)).toContain(en.report.finding.heading(finding.number));
     });
-    expect(onPage(numbers[4] ?? 0)).toContain(enReport.gaps.title);
-    expect(onPage(numbers[6] ?? 0)).toContain(enReport.limits.title);
+    expect(onPage(numbers[4] ?? 0)).toContain(en.report.gaps.title);
+    expect(onPage(numbers[6] ?? 0)).toContain(en.report.limits.title);
   });
 
   test('begin anew for each DANGER and WARNING, and never split a finding', () => {
     const starts = golden.snapshot.findings.map(({ number }) =>
       Array.from({ length: pages }, (_, index) => index + 1).find((page) =>
-        onPage(page).includes(enReport.finding.heading(number)),
+        onPage(page).includes(en.report.finding.heading(number)),
       ),
     );
     expect(new Set(starts.slice(0, 2)).size).toBe(2);
@@ -114,9 +114,9 @@ describe('its pages', () => {
     expect(stdout).toContain('No syntax or stream encoding errors found');
     const { stdout: json } = await run('qpdf', ['--json', '--json-key=outlines', file]);
     const titles = (JSON.parse(json) as { outlines: { title: string }[] }).outlines.map((entry) => entry.title);
-    expect(titles).toContain(enReport.first.title);
+    expect(titles).toContain(en.report.first.title);
     expect(titles).toContain('Garage, bench left');
-    expect(titles).toContain(enReport.log.title);
+    expect(titles).toContain(en.report.log.title);
     expect(pdf.toString('latin1')).toContain('/Lang (en-US)');
   });
 });

@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto';
 import sharp from 'sharp';
 import { REPORT_LIMITS } from '@/lib/findings/wording/report-limits';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import { canonicalJson, RENDERER, type ReportSnapshot, type SnapshotFinding } from '@/lib/schemas/snapshot';
 
 const FIRM = '0192f0aa-0000-7000-8000-000000000001';
@@ -267,8 +267,8 @@ function logRows(): ReportSnapshot['log'] {
           : { hn: 'lit' as const, hg: index % 2 ? ('off' as const) : ('lit' as const), ng: 'off' as const },
       volts: index === 0 ? { hn: 119.8, hg: 119.7, ng: 0, meter: 'low-impedance' as const } : undefined,
       circuit: index < 2 ? '9' : undefined,
-      protection: { en: index === 3 ? enReport.gfci['works-no-ground'] : '' },
-      result: { en: index === 11 ? enReport.log.notTested : enReport.condition['open-ground'] },
+      protection: { en: index === 3 ? en.report.gfci['works-no-ground'] : '' },
+      result: { en: index === 11 ? en.report.log.notTested : en.report.condition['open-ground'] },
       findings: index === 0 ? [1] : [],
     };
   });

@@ -5,7 +5,7 @@ import { findNewestVersion } from '@/db/reports';
 import { BrandMark } from '@/components/brand-mark';
 import { WebReport } from '@/components/report/web-report';
 import { currentRecipient } from '@/lib/auth/recipient';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 
 export const metadata: Metadata = { title: 'Your report', robots: { index: false }, referrer: 'no-referrer' };
 
@@ -28,10 +28,10 @@ export default async function SharedReportPage({ params }: PageProps<'/shared/[g
         </span>
         {pdf ? (
           <a className="button print:hidden" href={address(`/api/reports/${version.id}/pdf`)}>
-            {enReport.web.pdf}
+            {en.report.web.pdf}
           </a>
         ) : (
-          <span className="text-s text-ink-2 print:hidden">{enReport.web.pdfSoon}</span>
+          <span className="text-s text-ink-2 print:hidden">{en.report.web.pdfSoon}</span>
         )}
       </p>
       <WebReport

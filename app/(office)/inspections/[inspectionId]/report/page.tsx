@@ -4,7 +4,7 @@ import { HazardWord } from '@/components/findings/hazard-word';
 import { listVersions, reviewInspection } from '@/db/reports';
 import { requireMember } from '@/lib/auth/session';
 import { stateProfile } from '@/lib/findings';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import type { ReportSnapshot } from '@/lib/schemas/snapshot';
 import { idSchema } from '@/lib/schemas/id';
 import { ReleaseForm } from './release-form';
@@ -37,7 +37,7 @@ export default async function ReportPage({ params }: PageProps<'/inspections/[in
           </p>
           <p className="mt-3 text-s text-ink-2">Signed as</p>
           <p className="font-serif text-l italic">{signer.name || 'No signature yet'}</p>
-          {signer.licenseNumber && <p className="text-s">{enReport.license(signer.licenseNumber)}</p>}
+          {signer.licenseNumber && <p className="text-s">{en.report.license(signer.licenseNumber)}</p>}
           <ReleaseForm
             inspectionId={id.data}
             nextNumber={nextNumber}
@@ -80,7 +80,7 @@ function PageOne({ draft }: { draft: ReportSnapshot }) {
         Page one, as the buyer gets it
       </h2>
       <div className="mt-2 grid gap-3 bg-sheet p-4">
-        <h3 className="font-serif text-l font-bold">{enReport.first.title}</h3>
+        <h3 className="font-serif text-l font-bold">{en.report.first.title}</h3>
         {draft.findings.length === 0 && <p>No finding is kept yet.</p>}
         {draft.findings.map((finding) => (
           <div key={finding.id}>
@@ -88,7 +88,7 @@ function PageOne({ draft }: { draft: ReportSnapshot }) {
               <HazardWord signal={finding.signal} small /> {finding.place}
             </p>
             <p>
-              <b>{enReport.urgency[finding.urgency]}.</b> {finding.text.en.title}
+              <b>{en.report.urgency[finding.urgency]}.</b> {finding.text.en.title}
             </p>
           </div>
         ))}

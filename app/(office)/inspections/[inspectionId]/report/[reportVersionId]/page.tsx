@@ -4,7 +4,7 @@ import { notFound } from 'next/navigation';
 import { findVersion } from '@/db/reports';
 import { WebReport } from '@/components/report/web-report';
 import { requireMember } from '@/lib/auth/session';
-import { enReport } from '@/lib/messages/en-report';
+import { en } from '@/lib/messages/en';
 import { idSchema } from '@/lib/schemas/id';
 
 export const metadata: Metadata = { title: 'A released version' };
@@ -26,7 +26,7 @@ export default async function VersionPage({
         <Link className="button" href={`/inspections/${inspectionId}/report` as Route}>
           Back to Report
         </Link>
-        {number < version.newest && <strong>{enReport.web.olderVersion(number, version.newest)}</strong>}
+        {number < version.newest && <strong>{en.report.web.olderVersion(number, version.newest)}</strong>}
       </p>
       <WebReport
         snapshot={version.snapshot}
