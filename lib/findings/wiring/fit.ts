@@ -12,6 +12,9 @@ const MOST_SCALE = 132 / NOMINAL_VOLTS;
 /** What a field meter, its leads and a changing supply are allowed. */
 const TOLERANCE_VOLTS = 2;
 const TOLERANCE_SHARE = 0.035;
+/** From here a pair reads the supply itself: load on the circuit excuses no reading outside its range. */
+const FULL_VOLTS = 100;
+const METER_ERROR = 0.005;
 const BETWEEN = [0, 0.25, 0.5, 0.75] as const;
 const RATIO_TOLERANCE = 0.02;
 /** Lamps whose voltages differ by less than twice this light or stay off together. */
@@ -88,10 +91,15 @@ function withinSupply(read: Trio, predicted: Trio, slots: Slots): boolean {
       if (volts > tolerance) return false;
       continue;
     }
+    if (expected >= FULL_VOLTS && isBeyondSupply(volts / Math.max(expected, NOMINAL_VOLTS))) return false;
     least = Math.max(least, (volts - tolerance) / expected);
     most = Math.min(most, (volts + tolerance) / expected);
   }
   return least <= most;
+}
+
+function isBeyondSupply(scale: number): boolean {
+  return scale < LEAST_SCALE * (1 - METER_ERROR) || scale > MOST_SCALE * (1 + METER_ERROR);
 }
 
 /**
