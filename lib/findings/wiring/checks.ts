@@ -1,22 +1,12 @@
 import type { ContactSensor, LampPattern, LoadTest, VoltTrio, WiringEvidence } from '../facts';
 import { assessLoadTest } from '../supply/load-test';
-import type { Meter, WiringCondition } from '../vocabulary';
+import { WIRING_CHECKS, type Meter, type WiringCheck, type WiringCondition } from '../vocabulary';
 import { hasMeter, loadsAreOff } from './fit';
 import { STRIKE_VOLTS, Variant } from './instruments';
 import { piecesOf, standingUnder, type Piece } from './pieces';
 
-/** In the order of the inspector's own safety; those that share a number ask for nothing at the slots. */
-export const CHECK_KINDS = [
-  'sensor',
-  'power',
-  'unplug',
-  'high-impedance',
-  'low-impedance-neutral',
-  'low-impedance-all',
-  'load-test',
-  'ground-ohms',
-] as const;
-export type CheckKind = (typeof CHECK_KINDS)[number];
+export const CHECK_KINDS = WIRING_CHECKS;
+export type CheckKind = WiringCheck;
 
 /** What the candidates that stand can do to whoever touches metal there. */
 export type Danger = { liveGround: boolean; openGround: boolean };

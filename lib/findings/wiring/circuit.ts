@@ -16,7 +16,7 @@ export type Circuit = {
 };
 export type Potentials = Partial<Record<CircuitNode, Phasor>>;
 
-export const MAINS_HERTZ = 60;
+const MAINS_HERTZ = 60;
 
 /** X = 1 / (2 pi f C), in ohms, of a capacitance in farads at a frequency in hertz. */
 export function capacitiveReactanceOhms(farads: number, hertz: number = MAINS_HERTZ): number {

@@ -8,7 +8,7 @@ import { listNotProven } from './not-proven';
 import { hypothesesOf, piecesOf, standingUnder, type Piece } from './pieces';
 import { rankCandidates } from './standing';
 
-export { expectedReadings, type ExpectedReadings, type ReadingOptions } from './predict';
+export { expectedReadings } from './predict';
 
 /**
  * Which wiring conditions the evidence of one receptacle can mean. Every condition is a circuit that is solved for the

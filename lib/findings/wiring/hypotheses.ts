@@ -7,7 +7,7 @@ import { ohmsOf, type Wiring } from './wiring';
  * A family runs along one thing that nobody knows at the receptacle: the size of a load, of a joint, of a leak, or how
  * the cable lies. Readings between two neighbours of a family fit it too.
  */
-export type Family = readonly Wiring[];
+type Family = readonly Wiring[];
 
 const STRAYS: readonly Wiring['stray'][] = [
   { toEarth: 6e-9 },

@@ -21,9 +21,9 @@ const PAIRS = [
   ['H', 'G'],
   ['N', 'G'],
 ] as const;
-export const METER_OHMS: Record<Meter, number> = { 'high-impedance': 10e6, 'low-impedance': 3000 };
+const METER_OHMS: Record<Meter, number> = { 'high-impedance': 10e6, 'low-impedance': 3000 };
 /** A neon lamp with its series resistor, all three in the slots at once. */
-export const LAMP_OHMS = 200_000;
+const LAMP_OHMS = 200_000;
 /** Volts at which a neon lamp lights; real ones differ by about this band. */
 export const STRIKE_VOLTS = 75;
 export const STRIKE_BAND_VOLTS = 8;

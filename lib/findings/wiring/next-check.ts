@@ -36,7 +36,7 @@ export function chooseNextCheck(
   const sensor = isDangerous ? rated.find((check) => check.kind === 'sensor') : undefined;
   const useful = rated.filter((check) => check.gain > LEAST_GAIN_BITS);
   const best = sensor ?? useful.toSorted((a, b) => rankOf(b.gain) - rankOf(a.gain))[0];
-  return best && { instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
+  return best && { kind: best.kind, instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
 }
 
 /** Gains that differ by less than this are equal, and then the safer check goes first. */

@@ -16,7 +16,7 @@ export function listNotProven(fitting: readonly WiringCondition[], evidence: Wir
     ...loadTestLimits(evidence),
     ...groundLimits(evidence),
     ...faceLimits(evidence),
-    'Only the slots that were read, as they were at that moment: the other half of a split outlet, a switch, and joints elsewhere on the circuit are not covered.',
+    'This covers the slots that were read, as they were at that moment, and not the other half of a split outlet, a switch, or joints elsewhere on the circuit.',
   ];
 }
 
@@ -39,13 +39,15 @@ function correctLimits(fitting: readonly WiringCondition[], { slots, wiringMetho
   if (slots === 2) return [];
   const limits: string[] = [];
   if (fitting.includes('bootleg-ground'))
-    limits.push('That the ground slot reaches a real ground and not a jumper to the neutral.');
+    limits.push('That the ground slot reaches a real ground is unproven: a jumper to the neutral reads the same.');
   if (fitting.includes('reversed-bootleg-ground'))
-    limits.push('That the ground slot is not live: swapped wires with a jumper read the same on lamps and meters.');
+    limits.push(
+      'That the ground slot is not live is unproven: swapped wires with a jumper read the same on lamps and meters.',
+    );
   if (fitting.includes('shared-neutral-open') || fitting.includes('service-neutral-open'))
-    limits.push('That the neutral holds when the loads on the two legs of the supply differ.');
+    limits.push('That the neutral holds when the loads on the two legs of the supply differ is unproven.');
   if (wiringMethod === 'two-wire')
-    limits.push('The ground: two-wire cable brings none, so a ground slot that reads here is unproven.');
+    limits.push('The ground is unproven: two-wire cable brings none, whatever the ground slot reads.');
   return limits;
 }
 
@@ -73,7 +75,9 @@ function sensorLimits({ sensor, lamps, slots }: WiringEvidence): string[] {
   if (sensor.groundSlot && lamps && bitsOf(lamps) === '100')
     limits.push('Without a ground, the answer at the ground slot may be a phantom voltage. Treat it as live.');
   if (slots === 2 && sensor.coverScrew)
-    limits.push('Why the cover screw is live: this face has no ground slot to read. Treat the metal as live.');
+    limits.push(
+      'Why the cover screw is live is unproven: this face has no ground slot to read. Treat the metal as live.',
+    );
   return limits;
 }
 
@@ -100,8 +104,8 @@ function loadTestLimits(evidence: WiringEvidence): string[] {
     case 'suspected':
       limits.push(
         evidence.nearBondedPanel === undefined
-          ? 'The jumper itself: the load test only raises the suspicion, if the receptacle is not near the panel.'
-          : 'The jumper itself: the load test only raises the suspicion.',
+          ? 'A jumper is suspected and not proven, and only if the receptacle is not near the panel.'
+          : 'A jumper is suspected and not proven: the load test only raises the suspicion.',
       );
       break;
     case 'undecided':
@@ -121,6 +125,9 @@ function groundLimits({ groundOhms, slots }: WiringEvidence): string[] {
 }
 
 function faceLimits({ slots, nominalVolts }: WiringEvidence): string[] {
-  if (slots === 2) return ['Polarity, and whether the box has a ground: a two-slot face offers one reading only.'];
-  return nominalVolts === 240 ? ['Which leg is on which slot, and the neutral of the circuit if it has one.'] : [];
+  if (slots === 2)
+    return ['Polarity is unproven, and whether the box has a ground: a two-slot face offers one reading only.'];
+  return nominalVolts === 240
+    ? ['Which leg is on which slot is unproven, and so is the neutral of the circuit if it has one.']
+    : [];
 }

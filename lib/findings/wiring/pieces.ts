@@ -103,7 +103,7 @@ function lampsPiece(evidence: WiringEvidence): Piece[] {
   const { lamps, slots } = evidence;
   if (!lamps) return [];
   const off = loadsAreOff(evidence);
-  const shown = slots === 2 ? `the lamp between the slots ${lamps.hn}` : lampsInWords(lamps);
+  const shown = slots === 2 ? `hot to neutral ${lamps.hn}` : lampsInWords(lamps);
   return [
     {
       kind: 'lamps',

@@ -113,7 +113,7 @@ export function predictedLamps(hypothesis: Hypothesis, loadsOff: boolean, slots:
   const variant = typicalOf(hypothesis, loadsOff);
   if (!variant) return 'nothing';
   const lamps = lampsOf(variant);
-  return slots === 2 ? `the lamp between the slots ${lamps.hn}` : lampsInWords(lamps);
+  return slots === 2 ? `hot to neutral ${lamps.hn}` : lampsInWords(lamps);
 }
 
 /** "about 120, 62 and 57 volts" in the order hot–neutral, hot–ground, neutral–ground. */

@@ -2,7 +2,7 @@ import type { Supply } from '../vocabulary';
 import type { Branch, Circuit, CircuitNode, Phasor } from './circuit';
 
 export type SlotNode = 'H' | 'N' | 'G';
-export type Rail = 'L1' | 'L2' | 'P';
+type Rail = 'L1' | 'L2' | 'P';
 
 /** One way in which a receptacle can be wired, loaded and placed. Ohms, watts at 120 V, farads. */
 export type Wiring = {
@@ -24,11 +24,11 @@ export type Wiring = {
 
 export const NOMINAL_VOLTS = 120;
 /** 15 m of 12 AWG solid copper at 75 °C, 6.34 ohms per km (facts: NEC chapter 9, table 8). */
-export const CONDUCTOR_OHMS = 15 * 0.00634;
+const CONDUCTOR_OHMS = 15 * 0.00634;
 /** Flat cable lies hot, ground, neutral: 60 pF/m between neighbours, 20 pF/m hot to neutral, 5 pF/m to earth; 15 m. */
-export const ADJACENT_FARADS = 15 * 60e-12;
-export const FAR_FARADS = 15 * 20e-12;
-export const EARTH_FARADS = 15 * 5e-12;
+const ADJACENT_FARADS = 15 * 60e-12;
+const FAR_FARADS = 15 * 20e-12;
+const EARTH_FARADS = 15 * 5e-12;
 const SERVICE_OHMS = 0.01;
 const JUMPER_OHMS = 0.001;
 /** The usual most that a single ground rod may have. */
@@ -40,7 +40,7 @@ export function ohmsOf(watts: number): number {
 }
 
 /** Potentials of the legs against earth: opposite on a split phase, a third of a turn apart on a wye. */
-export function legs(supply: Supply): { L1: Phasor; L2: Phasor } {
+function legs(supply: Supply): { L1: Phasor; L2: Phasor } {
   const L1 = { re: NOMINAL_VOLTS, im: 0 };
   if (supply === '120/240') return { L1, L2: { re: -NOMINAL_VOLTS, im: 0 } };
   return { L1, L2: { re: -NOMINAL_VOLTS / 2, im: -NOMINAL_VOLTS * Math.sqrt(0.75) } };
