@@ -22,6 +22,7 @@ import type {
   StateProfileCode,
   Supply,
   TripResult,
+  WiringCheck,
   WiringCondition,
   WiringMethod,
   YesNoUnknown,
@@ -63,7 +64,7 @@ export type WiringDiagnosis = {
   /** What this evidence cannot tell; never empty. */
   notProven: string[];
   /** The one check that splits the candidates best. */
-  nextCheck?: { instruction: string; separates: WiringCondition[] };
+  nextCheck?: { kind: WiringCheck; instruction: string; separates: WiringCondition[] };
   /** Set where two pieces of evidence cannot both be right. */
   conflict?: string;
 };

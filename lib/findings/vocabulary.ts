@@ -32,6 +32,19 @@ export const WIRING_CONDITIONS = [
 ] as const;
 export type WiringCondition = (typeof WIRING_CONDITIONS)[number];
 
+/** Checks that an inspector can make, in the order of the inspector's own safety. */
+export const WIRING_CHECKS = [
+  'sensor',
+  'power',
+  'unplug',
+  'high-impedance',
+  'low-impedance-neutral',
+  'low-impedance-all',
+  'load-test',
+  'ground-ohms',
+] as const;
+export type WiringCheck = (typeof WIRING_CHECKS)[number];
+
 export const YES_NO_UNKNOWN = ['yes', 'no', 'unknown'] as const;
 export type YesNoUnknown = (typeof YES_NO_UNKNOWN)[number];
 
