@@ -2,9 +2,22 @@ import type { GfciTrial } from '../facts';
 import type { GfciVerdict, Protects } from '../vocabulary';
 import { maxTripSeconds } from './trip-time';
 
-/** A trial as the table reads it: which bits the lamps showed before, and what the lamps said of the ground. */
-export type Seen = GfciTrial & { bits: string | undefined; ground: 'yes' | 'no' | 'unknown' };
-export type Row = { id: string; verdict: GfciVerdict; protects?: Protects; when: (t: Seen) => boolean; says: string };
+/**
+ * A trial as the table reads it: which bits the lamps showed before, what the lamps said of the ground, and whether a
+ * tester result was set aside because of them.
+ */
+export type Seen = GfciTrial & {
+  bits: string | undefined;
+  ground: 'yes' | 'no' | 'unknown';
+  testerSetAside?: boolean;
+};
+export type Row = {
+  id: string;
+  verdict: GfciVerdict;
+  protects?: Protects;
+  when: (t: Seen) => boolean;
+  says: string | ((t: Seen) => string);
+};
 
 const HOLD_BITS = ['001', '010', '011', '111'];
 export const trips = (result: GfciTrial['button']) => result === 'trips';
@@ -86,7 +99,7 @@ export const DOWNSTREAM: Row[] = [
     verdict: 'upstream-protects-no-ground',
     protects: 'yes',
     when: (t) => upstreamKilled(t) && t.ground === 'no',
-    says: 'It went dead on the upstream button: that is the proof of protection. There is no ground. This reduces shock and gives no ground; it is not for refrigerators or washers. Check for both marks on the plate.',
+    says: 'It went dead on the upstream button: that is the proof of protection. The lamps show no ground. This reduces shock and gives no ground; it is not for refrigerators or washers. Check for both marks on the plate.',
   },
   {
     id: 'D26',
@@ -100,7 +113,7 @@ export const DOWNSTREAM: Row[] = [
     verdict: 'upstream-protects',
     protects: 'yes',
     when: (t) => upstreamKilled(t) || trips(t.tester),
-    says: 'A GFCI upstream protects it. Its place is as recorded, or not recorded. Where the upstream button left it live and the tester put it out, another device protects it.',
+    says: upstreamWords,
   },
   {
     id: 'D17',
@@ -204,7 +217,8 @@ export const OWN_DEVICE: Row[] = [
     verdict: 'works-no-ground',
     protects: 'yes',
     when: (t) => trips(t.button) && t.ground === 'no',
-    says: 'It works by its own button. There is no ground, so a plug-in tester cannot trip it, and that says nothing against it. It reduces shock and gives no ground; it is not for refrigerators or washers. Check for the mark “No Equipment Ground”.',
+    says: (t) =>
+      `It works by its own button. ${trips(t.tester) ? 'The lamps show no ground, and yet the tester tripped it' : 'The lamps show no ground, so a plug-in tester cannot trip it, and that says nothing against it'}. It reduces shock and gives no ground; it is not for refrigerators or washers. Check for the mark “No Equipment Ground”.`,
   },
   {
     id: 'D19',
@@ -225,7 +239,7 @@ export const OWN_DEVICE: Row[] = [
     verdict: 'works-local-only',
     protects: 'yes',
     when: (t) => trips(t.button) && trips(t.tester) && t.downstreamDead === false,
-    says: 'It works. The other point that was tried is not fed through it.',
+    says: 'It works by its button and by the tester. The other point that was tried is not fed through it.',
   },
   {
     id: 'D23',
@@ -239,13 +253,19 @@ export const OWN_DEVICE: Row[] = [
     verdict: 'works-button-only',
     protects: 'yes',
     when: (t) => trips(t.button),
-    says: 'It works by its own button. The tester was not used.',
+    says: (t) =>
+      t.testerSetAside
+        ? 'It works by its own button. With these lamps the tester’s result does not count.'
+        : 'It works by its own button. The tester was not used.',
   },
   {
     id: 'D25',
     verdict: 'tester-only',
     when: (t) => trips(t.tester),
-    says: 'The tester tripped it. Its own button was not pressed.',
+    says: (t) =>
+      t.resets === true
+        ? 'The tester tripped it and it reset. Its own button was not pressed.'
+        : 'The tester tripped it. Its own button was not pressed. Confirm that it is back on.',
   },
   {
     id: 'D16',
@@ -265,4 +285,11 @@ function isSlow({ measured }: Seen): boolean {
   if (!measured) return false;
   const limit = maxTripSeconds(measured.milliamps);
   return limit !== null && measured.seconds > limit;
+}
+
+function upstreamWords(t: Seen): string {
+  if (upstreamKilled(t)) return 'It went dead on the upstream device’s button and came back: that device protects it.';
+  const where = t.deviceFound ? 'That device was found.' : 'Where that device is was not recorded.';
+  const other = t.button === undefined ? 'a GFCI upstream' : 'a GFCI other than the one whose button was pressed';
+  return `The tester put it out and it came back: ${other} protects it. ${where}`;
 }

@@ -47,8 +47,7 @@ export function assessLoadTest(test: LoadTest, context: LoadContext = {}): LoadA
 }
 
 function bandOf(measured: number): LoadBand {
-  // A reading of exactly 3 % must not become "above" by the rounding of a subtraction.
-  const percent = Number(measured.toFixed(6));
+  const percent = settled(measured);
   if (percent > 8) return 'above-8';
   if (percent > 5) return 'above-5';
   return percent > 3 ? 'above-3' : 'good';
@@ -59,12 +58,17 @@ function groundOf(
   dropVolts: number,
   { nearBondedPanel, sharedNeutral }: LoadContext,
 ): GroundAnswer {
-  if (noLoadNg === undefined || loadedNg === undefined || dropVolts < LEAST_DROP_VOLTS) return 'not-assessed';
-  const share = (loadedNg - noLoadNg) / dropVolts;
+  if (noLoadNg === undefined || loadedNg === undefined || settled(dropVolts) < LEAST_DROP_VOLTS) return 'not-assessed';
+  const share = settled((loadedNg - noLoadNg) / dropVolts);
   if (share > DOUBTFUL_SHARE) return 'neutral-doubtful';
   if (share >= SEPARATE_SHARE) return 'no-joint-here';
-  const quiet = noLoadNg <= QUIET_NG_VOLTS && loadedNg <= QUIET_NG_VOLTS + JOINT_OHMS * amps;
+  const quiet = noLoadNg <= QUIET_NG_VOLTS && loadedNg <= settled(QUIET_NG_VOLTS + JOINT_OHMS * amps);
   // Close to a bond, or with a neutral that another leg may balance, a quiet neutral proves nothing.
   const excused = nearBondedPanel === true || sharedNeutral === 'yes' || sharedNeutral === 'unknown';
   return quiet && !excused ? 'suspected' : 'undecided';
+}
+
+/** A reading of exactly 3 V or 3 % must not fall on the wrong side by the rounding of a subtraction. */
+function settled(measured: number): number {
+  return Number(measured.toFixed(6));
 }
