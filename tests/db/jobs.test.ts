@@ -128,11 +128,20 @@ test('a PDF that cannot be made says why on the version’s line', async () => {
 test('a version without a PDF for ten minutes is asked for again', async () => {
   const { reportVersionId } = await released();
   const key = `render:${reportVersionId}:en`;
-  await asOwner('delete from graphile_worker._private_jobs where key = $1', [key]);
-  await asOwner(`update renders set updated_at = now() - interval '11 minutes' where report_version_id = $1`, [
-    reportVersionId,
-  ]);
-  const jobs = new Pool({ connectionString: process.env.DATABASE_JOBS_URL, max: 1 });
+  const owner = new Pool({ connectionString: process.env.DATABASE_OWNER_URL, max: 1 });
+  const client = await owner.connect();
+  // One transaction, so that a worker of this database cannot take the job before it is looked at.
+  await client.query('begin');
+  await client.query('delete from graphile_worker._private_jobs where key = $1', [key]);
+  const late = `update renders set state = 'waiting', updated_at = now() - interval '11 minutes' where report_version_id = $1`;
+  await client.query(late, [reportVersionId]);
+  await client.query('select sweep_renders()');
+  const { rowCount } = await client.query('select 1 from graphile_worker.jobs where key = $1', [key]);
+  await client.query('rollback');
+  client.release();
+  await owner.end();
+  expect(rowCount).toBe(1);
+});
   await jobs.query('select sweep_renders()');
   await jobs.end();
   expect(await asOwner('select 1 from graphile_worker.jobs where key = $1', [key])).toHaveLength(1);

@@ -12,6 +12,7 @@ import { findPhoto, listPhotos, recordRefused, recordStored } from '@/db/photos'
 import { applyFromDesk, applyOperations } from '@/db/sync';
 import { listGrants, revokeGrant, sendReport } from '@/db/grants';
 import { findReportFile, retryRender } from '@/db/report-files';
+import { loadFindings } from '@/db/report-findings';
 import { findNewestVersion, findVersion, listVersions, releaseReport, reviewInspection } from '@/db/reports';
 import { inspectionFilterSchema } from '@/lib/schemas/inspection';
 import type { Operation } from '@/lib/schemas/operations';
@@ -179,6 +180,7 @@ export const ENTRIES: Record<string, Entry> = {
   'report-files.recordReportFile': { because: JOB },
   'report-files.recordRenderFailure': { because: JOB },
   'report-files.retryRender': { asks: (actor, of) => retryRender(actor, of.versionId) },
+  'report-findings.loadFindings': { asks: (actor, of) => loadFindings(actor, of.inspectionId) },
   'reports.reviewInspection': { asks: (actor, of) => reviewInspection(actor, of.inspectionId) },
   'reports.releaseReport': { asks: (actor, of) => releaseReport(actor, of.inspectionId) },
   'reports.enqueueRender': { because: INSIDE },
