@@ -142,10 +142,6 @@ test('a version without a PDF for ten minutes is asked for again', async () => {
   await owner.end();
   expect(rowCount).toBe(1);
 });
-  await jobs.query('select sweep_renders()');
-  await jobs.end();
-  expect(await asOwner('select 1 from graphile_worker.jobs where key = $1', [key])).toHaveLength(1);
-});
 
 test('the jobs of a worker that died are freed, and those of a living one are not', async () => {
   const { firm, reportVersionId } = await released();
