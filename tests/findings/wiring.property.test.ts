@@ -1,13 +1,15 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { diagnoseWiring } from '@/lib/findings';
+import { diagnoseWiring, expectedReadings } from '@/lib/findings';
 import type { ContactSensor, WiringEvidence } from '@/lib/findings/facts';
 import {
   LAMPS,
   METERS,
   SUPPLIES,
+  WIRING_CONDITIONS,
   WIRING_METHODS,
   YES_NO_UNKNOWN,
+  type Meter,
   type WiringCondition,
 } from '@/lib/findings/vocabulary';
 import { conditionsOf } from '../support/wiring';
@@ -90,13 +92,21 @@ test('more evidence never adds a candidate', () => {
 });
 
 test('one more answer of the live-wire sensor never adds a candidate', () => {
+  const answers = fc.record({
+    hotSlot: fc.boolean(),
+    neutralSlot: fc.boolean(),
+    groundSlot: fc.boolean(),
+    coverScrew: fc.boolean(),
+  });
+  const names = ['hotSlot', 'neutralSlot', 'groundSlot', 'coverScrew'] as const;
   fc.assert(
     fc.property(
-      evidence,
-      sensor,
-      fc.subarray(['hotSlot', 'neutralSlot', 'groundSlot', 'coverScrew']),
-      (base, all, kept) => {
-        const part = Object.fromEntries(Object.entries(all).filter(([key]) => kept.includes(key)));
+      answers,
+      fc.subarray([...names]),
+      fc.option(fc.record({ hn: lamp, hg: lamp, ng: lamp })),
+      (all, kept, lamps) => {
+        const base: WiringEvidence = { slots: 3, ...(lamps ? { lamps } : {}) };
+        const part = Object.fromEntries(kept.map((name) => [name, all[name]]));
         const fewer = conditionsOf(diagnoseWiring({ ...base, sensor: part }));
         expect(fewer).toEqual(expect.arrayContaining(conditionsOf(diagnoseWiring({ ...base, sensor: all }))));
       },
@@ -152,32 +162,73 @@ test('the same evidence gives the same diagnosis whatever the order of its keys'
   );
 });
 
-test('the next check obeys the order of the inspector’s own safety', () => {
-  fc.assert(
-    fc.property(evidence, (given) => {
-      const diagnosis = diagnoseWiring(given);
-      const { nextCheck } = diagnosis;
-      if (!nextCheck) return;
-      const candidates = conditionsOf(diagnosis);
-      const { instruction } = nextCheck;
-      expect(candidates).toEqual(expect.arrayContaining(nextCheck.separates));
-      expect(nextCheck.separates.length).toBeGreaterThan(1);
-      expect(instruction).not.toMatch(/button/i);
+function expectSafe(given: WiringEvidence): void {
+  const diagnosis = diagnoseWiring(given);
+  const { nextCheck } = diagnosis;
+  if (!nextCheck) return;
+  const candidates = conditionsOf(diagnosis);
+  const { instruction } = nextCheck;
+  expect(candidates).toEqual(expect.arrayContaining(nextCheck.separates));
+  expect(nextCheck.separates.length).toBeGreaterThan(1);
+  expect(instruction).not.toMatch(/button/i);
 
-      const loads = /load test|12 to 15 ampere/i.test(instruction);
-      const lowImpedance = /low impedance/i.test(instruction);
-      const groundInstrument = /ground-impedance/i.test(instruction);
-      const trios = [given.volts, ...(given.moreVolts ?? [])];
-      if (loads || lowImpedance || groundInstrument)
-        expect(trios.some((read) => read?.meter === 'high-impedance')).toBe(true);
-      if (given.slots === 2) return;
-      const live = candidates.some((condition) => LIVE_GROUND.includes(condition));
-      const open = candidates.some((condition) => OPEN_GROUND.includes(condition));
-      if (live && !given.sensor) expect(instruction).toMatch(/non-contact sensor/);
-      if (!live && !open) return;
-      expect(loads || groundInstrument).toBe(false);
-      expect(lowImpedance && /hot to ground/i.test(instruction)).toBe(false);
-    }),
-    { numRuns: 4000 },
-  );
+  const loads = /load test|12 to 15 ampere/i.test(instruction);
+  const lowImpedance = /low impedance/i.test(instruction);
+  const groundInstrument = /ground-impedance/i.test(instruction);
+  const trios = [given.volts, ...(given.moreVolts ?? [])];
+  if (loads || lowImpedance || groundInstrument)
+    expect(trios.some((read) => read?.meter === 'high-impedance')).toBe(true);
+  if (given.slots === 2) return;
+  const live = candidates.some((condition) => LIVE_GROUND.includes(condition));
+  const open = candidates.some((condition) => OPEN_GROUND.includes(condition));
+  if (live && !given.sensor) expect(instruction).toMatch(/non-contact sensor/);
+  if (!live && !open) return;
+  expect(loads || groundInstrument).toBe(false);
+  expect(lowImpedance && /hot to ground/i.test(instruction)).toBe(false);
+}
+
+test('the next check obeys the order of the inspector’s own safety', () => {
+  fc.assert(fc.property(evidence, expectSafe), { numRuns: 4000 });
+});
+
+/** What a careful inspector would have read so far on a receptacle that has this condition. */
+const walk: fc.Arbitrary<WiringEvidence> = fc
+  .record({
+    condition: fc.constantFrom(...WIRING_CONDITIONS),
+    kept: fc.subarray(['lamps', 'high', 'low', 'supply', 'loads'] as const),
+    sensor: fc.option(sensor),
+    sharedNeutral: fc.constantFrom(...YES_NO_UNKNOWN),
+  })
+  .map(({ condition, kept, sensor: felt, sharedNeutral }) => {
+    const { lamps, highImpedance, lowImpedance } = expectedReadings(condition);
+    const read = ([hn, hg, ng]: [number, number, number], meter: Meter) => ({ hn, hg, ng, meter });
+    return {
+      slots: 3,
+      sharedNeutral,
+      ...(kept.includes('lamps') ? { lamps } : {}),
+      ...(kept.includes('high') ? { volts: read(highImpedance, 'high-impedance') } : {}),
+      ...(kept.includes('low') ? { moreVolts: [read(lowImpedance, 'low-impedance')] } : {}),
+      ...(kept.includes('supply') ? { supply: '120/240' } : {}),
+      ...(kept.includes('loads') ? { loadsUnplugged: 'yes', hardWiredLoadsOff: 'yes' } : {}),
+      ...(felt ? { sensor: felt } : {}),
+    };
+  });
+
+test('on readings that belong together the next check obeys that order too', () => {
+  fc.assert(fc.property(walk, expectSafe), { numRuns: 4000 });
+});
+
+test.each(WIRING_CONDITIONS)('the readings of %s leave it among the candidates', (condition) => {
+  const { lamps, highImpedance, lowImpedance } = expectedReadings(condition);
+  const read = ([hn, hg, ng]: [number, number, number], meter: Meter, scale: number) => ({
+    hn: hn * scale,
+    hg: hg * scale,
+    ng: ng * scale,
+    meter,
+  });
+  for (const scale of [0.88, 1, 1.08]) {
+    const volts = read(highImpedance, 'high-impedance', scale);
+    const moreVolts = [read(lowImpedance, 'low-impedance', scale)];
+    expect(conditionsOf(diagnoseWiring({ slots: 3, lamps, volts, moreVolts }))).toContain(condition);
+  }
 });

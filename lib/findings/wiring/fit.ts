@@ -91,14 +91,18 @@ function withinSupply(read: Trio, predicted: Trio, slots: Slots): boolean {
       if (volts > tolerance) return false;
       continue;
     }
-    if (expected >= FULL_VOLTS && isBeyondSupply(volts / Math.max(expected, NOMINAL_VOLTS))) return false;
     least = Math.max(least, (volts - tolerance) / expected);
     most = Math.min(most, (volts + tolerance) / expected);
   }
-  return least <= most;
+  return least <= most && !isBeyondSupply(read, predicted, slots);
 }
 
-function isBeyondSupply(scale: number): boolean {
+/** Of the pair that should read most: it is the supply, less what the loads on the circuit drop. */
+function isBeyondSupply(read: Trio, predicted: Trio, slots: Slots): boolean {
+  const pairs = slots === 2 ? 1 : 3;
+  const expected = Math.max(...predicted.slice(0, pairs));
+  if (expected < FULL_VOLTS) return false;
+  const scale = Math.abs(read[predicted.indexOf(expected)] ?? 0) / Math.max(expected, NOMINAL_VOLTS);
   return scale < LEAST_SCALE * (1 - METER_ERROR) || scale > MOST_SCALE * (1 + METER_ERROR);
 }
 

@@ -28,15 +28,24 @@ export function chooseNextCheck(
   if (fitting.length < 2) return undefined;
   const left = fitting.map((condition) => ({ condition, variants: variantsLeft(condition, evidence) }));
   const danger = dangerOf(left, evidence);
-  const rated = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence))
-    .map((kind) => ({ kind, ...worthOf(kind, left, evidence) }))
-    .filter((check) => check.separates.length > 1);
+  const rated = CHECK_KINDS.filter((kind) => isOpen(kind, evidence) && isSafe(kind, danger, evidence)).map((kind) => ({
+    kind,
+    ...worthOf(kind, left, evidence),
+  }));
+  const best = pickCheck(rated, danger, evidence);
+  if (!best) return undefined;
+  const separates = best.separates.length > 1 ? best.separates : [...fitting];
+  return { kind: best.kind, instruction: instructionFor(best.kind, evidence, danger), separates };
+}
+
+type Rated = Worth & { kind: CheckKind };
+
+function pickCheck(rated: readonly Rated[], danger: Danger, { sensor }: WiringEvidence): Rated | undefined {
   // Whoever goes on to touch the device or an appliance has to know first whether its metal is live.
-  const isDangerous = danger.liveGround || danger.openGround;
-  const sensor = isDangerous ? rated.find((check) => check.kind === 'sensor') : undefined;
-  const useful = rated.filter((check) => check.gain > LEAST_GAIN_BITS);
-  const best = sensor ?? useful.toSorted((a, b) => rankOf(b.gain) - rankOf(a.gain))[0];
-  return best && { kind: best.kind, instruction: instructionFor(best.kind, evidence, danger), separates: best.separates };
+  const first = rated.find((check) => check.kind === 'sensor');
+  if (first && (danger.liveGround || danger.openGround) && (first.separates.length > 1 || !sensor)) return first;
+  const useful = rated.filter((check) => check.gain > LEAST_GAIN_BITS && check.separates.length > 1);
+  return useful.toSorted((a, b) => rankOf(b.gain) - rankOf(a.gain))[0];
 }
 
 /** Gains that differ by less than this are equal, and then the safer check goes first. */
