@@ -12,7 +12,7 @@ export function WebFirst({ findings }: { findings: SnapshotFinding[] }) {
       {findings.map((finding) => (
         <li
           key={finding.id}
-          className="grid grid-cols-[5.5rem_1fr] gap-4 border-b border-hairline py-6 break-inside-avoid max-sm:grid-cols-1"
+          className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-4 border-b border-hairline py-6 break-inside-avoid max-sm:grid-cols-[minmax(0,1fr)]"
         >
           <div className="max-sm:hidden">{finding.drawing && <WebReading drawing={finding.drawing} size={88} />}</div>
           <div>

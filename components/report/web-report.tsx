@@ -25,7 +25,7 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
   const { now, days, rest } = leadCounts(findings);
   const others = otherPhotoIds(snapshot);
   return (
-    <article lang="en" className="mx-auto grid max-w-3xl gap-12">
+    <article lang="en" className="mx-auto grid max-w-3xl grid-cols-[minmax(0,1fr)] gap-12">
       <header>
         <p className="text-s text-ink-2">
           {inspection.street}, {inspection.cityLine} · {dayIn(inspection.timeZone, inspection.scheduledAt)} ·{' '}
@@ -39,7 +39,7 @@ export function WebReport({ snapshot, sha256, photoSrc }: WebReportProps) {
       {first.length > 0 && <WebFirst findings={first} />}
       {later.length > 0 && <WebLater findings={later} />}
       <WebUnknown snapshot={snapshot} />
-      <section aria-labelledby="findings" className="grid gap-16">
+      <section aria-labelledby="findings" className="grid grid-cols-[minmax(0,1fr)] gap-16">
         <WebHeading id="findings">{en.report.web.findings}</WebHeading>
         {findings.map((finding) => (
           <WebFinding key={finding.id} finding={finding} snapshot={snapshot} photoSrc={photoSrc} />

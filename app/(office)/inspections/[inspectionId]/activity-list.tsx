@@ -21,8 +21,27 @@ export function ActivityList({ lines, timeZone }: { lines: AuditLine[]; timeZone
   );
 }
 
-/** "photo.stored" reads "Photo stored". */
+const SAID: Record<string, string> = {
+  'inspection.booked': 'Booked',
+  'inspection.set': 'House facts changed',
+  'inspection.advance': 'Moved on',
+  'inspection.cancelled': 'Cancelled',
+  'inspection.reopened': 'Opened again',
+  'area.add': 'Area added',
+  'receptacle.add': 'Receptacle added',
+  'receptacle.set': 'Receptacle changed',
+  'reading.add': 'Reading recorded',
+  'reading.withdraw': 'Reading taken back',
+  'skip.add': 'Skipped, with a reason',
+  'notice.add': 'Told, or put back on',
+  'photo.add': 'Photo announced',
+  'photo.stored': 'Photo stored',
+  'finding.decide': 'Finding decided',
+  'party.saved': 'Party saved',
+};
+
+/** A sentence where there is one; else the kind, read as words. */
 function wordsOf(kind: string): string {
-  const words = kind.replaceAll(/[.-]/g, ' ');
+  const words = SAID[kind] ?? kind.replaceAll(/[.-]/g, ' ');
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
