@@ -4,7 +4,7 @@ import type { SnapshotLogRow } from '@/lib/schemas/snapshot';
 import { wordsIn, type ReportPrint } from './report-context';
 import { Anchor, ReportPage } from './report-page';
 import { otherPhotoIds } from './report-order';
-import { Section, TableHead } from './report-parts';
+import { TableHead } from './report-parts';
 import { PhotoRows } from './report-photos';
 import { INK, RULE, styles } from './report-styles';
 
@@ -20,26 +20,29 @@ export function ReportLog({ print }: { print: ReportPrint }) {
   }));
   const others = otherPhotoIds(snapshot);
   return (
-    <ReportPage print={print} title={messages.log.title}>
-      <Anchor print={print} id="log" />
-      <Text style={styles.h1}>{messages.log.title}</Text>
-      <Text style={styles.lead}>{messages.log.lead}</Text>
-      <TableHead columns={columns} />
-      {snapshot.log.map((row, index) => (
-        <LogRow
-          key={row.receptacleId}
-          print={print}
-          row={row}
-          area={row.areaId === snapshot.log[index - 1]?.areaId ? '' : (names.get(row.areaId) ?? '')}
-        />
-      ))}
-      <Text style={[styles.small, { marginTop: 8 }]}>{messages.log.never}</Text>
+    <>
+      <ReportPage print={print} title={messages.log.title}>
+        <Anchor print={print} id="log" />
+        <Text style={styles.h1}>{messages.log.title}</Text>
+        <Text style={styles.lead}>{messages.log.lead}</Text>
+        <TableHead columns={columns} />
+        {snapshot.log.map((row, index) => (
+          <LogRow
+            key={row.receptacleId}
+            print={print}
+            row={row}
+            area={row.areaId === snapshot.log[index - 1]?.areaId ? '' : (names.get(row.areaId) ?? '')}
+          />
+        ))}
+        <Text style={[styles.small, { marginTop: 8 }]}>{messages.log.never}</Text>
+      </ReportPage>
       {others.length > 0 && (
-        <Section title={messages.log.photos}>
+        <ReportPage print={print} title={messages.log.photos}>
+          <Text style={styles.h1}>{messages.log.photos}</Text>
           <PhotoRows print={print} photoIds={others} />
-        </Section>
+        </ReportPage>
       )}
-    </ReportPage>
+    </>
   );
 }
 

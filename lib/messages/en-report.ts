@@ -137,7 +137,7 @@ export const enReport = {
   } satisfies Record<DeviceKind, string>,
   /** The leading condition in a few words, as the log shows it. */
   condition: {
-    correct: 'reads correct',
+    correct: 'lamps read correct',
     'open-ground': 'open ground',
     'open-neutral': 'open neutral',
     'open-neutral-with-load': 'open neutral, load plugged in',
