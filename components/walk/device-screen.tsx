@@ -110,6 +110,12 @@ export function DeviceScreen({
         outdoors={area?.place === 'outdoors' || area?.place === 'pool-area'}
         onSave={set}
       />
+      <a
+        className="flex min-h-[56px] items-center justify-center rounded-[2px] border-(length:--line-2) border-ink px-4 font-bold"
+        href={addressOf(state.inspection.id, { kind: 'photos', receptacleId: receptacle.id })}
+      >
+        Photos of this receptacle
+      </a>
       <PhysicalSigns walk={walk} state={state} receptacle={receptacle} />
       <WalkButton weight="quiet" onClick={() => void remove()}>
         Remove this receptacle from the list

@@ -9,6 +9,7 @@ import type { Draft, Walk } from '@/lib/walk/use-walk';
 import { LampPad, type TappedLamps } from './lamp-pad';
 import { lampsInWords, readsCorrect, SKIP_LABELS } from './labels';
 import { PhotoButton } from './photo-button';
+import { photosOf } from './photos-screen';
 import { receptacleName, receptaclesOf, skipOf, standingReadings } from './progress';
 import { ReceptacleStrip } from './receptacle-strip';
 import { addressOf, goTo } from './walk-address';
@@ -124,6 +125,11 @@ export function PadScreen({
           </WalkButton>
           <div className="grid grid-cols-2 gap-2">
             <TripLink inspectionId={inspectionId} current={current} />
+            <PhotosLink
+              inspectionId={inspectionId}
+              current={current}
+              count={current ? photosOf(state, current.id).length : 0}
+            />
             <WalkButton weight="quiet" onClick={() => void addAnother(walk, area, rows)}>
               Add a receptacle
             </WalkButton>
@@ -157,6 +163,26 @@ function TripLink({ inspectionId, current }: { inspectionId: string; current?: W
       href={addressOf(inspectionId, { kind: 'trip', receptacleId: current.id })}
     >
       Trip test
+    </a>
+  );
+}
+
+function PhotosLink({
+  inspectionId,
+  current,
+  count,
+}: {
+  inspectionId: string;
+  current?: WalkReceptacle;
+  count: number;
+}) {
+  if (!current || count === 0) return <span />;
+  return (
+    <a
+      className="flex min-h-[56px] items-center justify-center rounded-[2px] underline underline-offset-4"
+      href={addressOf(inspectionId, { kind: 'photos', receptacleId: current.id })}
+    >
+      Photos: {count}
     </a>
   );
 }

@@ -6,6 +6,7 @@ export type WalkView =
   | { kind: 'device'; receptacleId: string }
   | { kind: 'trip'; receptacleId: string }
   | { kind: 'told'; receptacleId: string }
+  | { kind: 'photos'; receptacleId: string }
   | { kind: 'still-off' }
   | { kind: 'waiting' };
 
@@ -23,7 +24,8 @@ function viewOf(kind: string, id: string, third: string): WalkView {
   if (kind === 'still-off' || kind === 'waiting') return { kind };
   if (!ID.test(id)) return { kind: 'areas' };
   if (kind === 'area') return { kind, areaId: id, receptacleId: ID.test(third) ? third : undefined };
-  if (kind === 'result' || kind === 'device' || kind === 'trip' || kind === 'told') return { kind, receptacleId: id };
+  if (kind === 'result' || kind === 'device' || kind === 'trip' || kind === 'told' || kind === 'photos')
+    return { kind, receptacleId: id };
   return { kind: 'areas' };
 }
 
@@ -40,6 +42,7 @@ export function addressOf(inspectionId: string, view: WalkView): string {
     case 'device':
     case 'trip':
     case 'told':
+    case 'photos':
       return `#${inspectionId}/${view.kind}/${view.receptacleId}`;
   }
 }

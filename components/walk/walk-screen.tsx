@@ -11,6 +11,7 @@ import { ArrivalCard } from './arrival-card';
 import { DeviceScreen } from './device-screen';
 import { PadScreen } from './pad-screen';
 import { countArea, countWords, areasInOrder, placeOf, receptacleName } from './progress';
+import { PhotosScreen } from './photos-screen';
 import { ResultScreen } from './result-screen';
 import { StillOffScreen } from './still-off-screen';
 import { ToldScreen } from './told-screen';
@@ -158,6 +159,12 @@ function View({ walk, state, view, points, off }: OpenedProps & { points: StillO
     case 'trip':
       return receptacle ? (
         <TripScreen key={receptacle.id} walk={walk} state={state} receptacle={receptacle} />
+      ) : (
+        <Gone />
+      );
+    case 'photos':
+      return receptacle ? (
+        <PhotosScreen key={receptacle.id} walk={walk} state={state} receptacle={receptacle} />
       ) : (
         <Gone />
       );
