@@ -1,48 +1,23 @@
-import type { Confidence, DistanceEnd, PlaceKind, SinkKind } from '../vocabulary';
-import { CONFIDENCES } from '../vocabulary';
+import { CONFIDENCES, NEC_EDITIONS, type Confidence } from '../vocabulary';
 import { afciRules } from './asked-afci';
 import { coverRules, tamperRules, weatherRules } from './asked-device';
 import { gfciRules } from './asked-gfci';
 import { editionRow } from './editions';
+import type { Asked, AskedPlace, Ruling, Spot } from './ruling';
 
-export type Asked = {
-  asked: 'yes' | 'no' | 'depends';
-  since?: number;
-  rows: string[];
-  confidence: Confidence;
-  note: string;
-};
-
-/** Distances and heights in feet; `'none'` says that there is no such thing near. */
-export type AskedPlace = {
-  place: PlaceKind | PlaceKind[];
-  edition: number;
-  volts?: 120 | 240;
-  amps?: number;
-  finished?: boolean;
-  heightFt?: number;
-  gradeAccess?: boolean;
-  dedicatedAppliance?: boolean;
-  sinkFt?: number | 'none';
-  sinkKind?: SinkKind;
-  tubOrShowerFt?: number | 'none';
-  poolFt?: number | 'none';
-  measuredTo?: DistanceEnd;
-};
-
-/** One place of the union, and everything known of the point. */
-export type Spot = Omit<AskedPlace, 'place'> & { place: PlaceKind };
-/** What one rule says of a spot; a rule that does not speak of it answers nothing. */
-export type Ruling = { asked: 'yes' | 'depends'; row: string; note?: string };
+export type { Asked } from './ruling';
 
 /** The list of the 2026 text was not seen beyond the rows that name that edition. */
 const LAST_EDITION_SEEN_WHOLE = 2023;
+const NOT_SEEN_WHOLE = 'The list of this edition was not seen in full; earlier rows are taken to stand.';
 
 /**
  * What an edition of the model code asks at a receptacle: GFCI, AFCI, tamper-resistant, weather-resistant, in-use cover.
- * Several places are a union. A distance or exposure that matters and is not given makes "depends", never "no".
- * `since` is the edition that first asked it, not when a town enforced it. Never throws. Source: the rows of editions.ts,
- * each with its mark.
+ * Several places are a union. A distance or exposure that matters and is not given makes "depends", never "no". An
+ * edition between two printed ones is the earlier. `since` is the edition from which on this point was asked it without
+ * a break, never a date on which a town enforced it; `rows` are those that decide, newest first, and those before them
+ * back to `since`. Of "no", `rows` are those that come near. Never throws. Source: the rows of editions.ts, each with its
+ * mark.
  */
 export function protectionAsked(p: AskedPlace): {
   gfci: Asked;
@@ -51,8 +26,10 @@ export function protectionAsked(p: AskedPlace): {
   weatherResistant: Asked;
   inUseCover: Asked;
 } {
-  const spots = [p.place].flat().map((place): Spot => ({ ...p, place }));
-  const answer = (rules: (spot: Spot) => Ruling[]) => combine(spots.flatMap(rules), p.edition);
+  const places = [p.place].flat();
+  const edition = NEC_EDITIONS.findLast((printed) => printed <= p.edition) ?? p.edition;
+  const answer = (rules: (spot: Spot) => Ruling[]) =>
+    combine((at) => places.flatMap((place) => rules({ ...p, place, edition: at })), edition);
   return {
     gfci: answer(gfciRules),
     afci: answer(afciRules),
@@ -62,28 +39,49 @@ export function protectionAsked(p: AskedPlace): {
   };
 }
 
-function combine(rulings: Ruling[], edition: number): Asked {
-  const yes = rulings.filter((ruling) => ruling.asked === 'yes');
-  const deciding = yes.length > 0 ? yes : rulings;
-  if (deciding.length === 0) {
-    const seenWhole = edition <= LAST_EDITION_SEEN_WHOLE;
-    return {
-      asked: 'no',
-      rows: [],
-      confidence: seenWhole ? 'high' : 'medium',
-      note: seenWhole ? '' : 'The list of this edition was not seen in full.',
-    };
-  }
-  const rows = deciding.map((ruling) => editionRow(ruling.row));
-  const confidences = rows.map((found) => CONFIDENCES.indexOf(found.confidence));
-  // One sure row is enough for "yes"; "depends" is only as sure as its weakest row.
-  const confidence = CONFIDENCES[yes.length > 0 ? Math.min(...confidences) : Math.max(...confidences)] ?? 'low';
-  const notes = deciding.flatMap((ruling) => ruling.note ?? []);
+type RulingsAt = (edition: number) => Ruling[];
+
+function combine(rulingsAt: RulingsAt, edition: number): Asked {
+  const rulings = rulingsAt(edition);
+  const asked = verdictOf(rulings);
+  const deciding = rulings.filter((ruling) => ruling.asked === asked);
+  const history = asked === 'no' ? [] : historyOf(rulingsAt, edition, asked);
+  const since = history.at(-1)?.edition;
+  const seenWhole = edition <= LAST_EDITION_SEEN_WHOLE;
+  const notes = [...deciding.flatMap((ruling) => ruling.note ?? []), ...(seenWhole ? [] : [NOT_SEEN_WHOLE])];
   return {
-    asked: yes.length > 0 ? 'yes' : 'depends',
-    since: Math.min(...rows.map((found) => found.edition)),
-    rows: [...new Set(rows.map((found) => found.id))],
-    confidence,
+    asked,
+    ...(since === undefined ? {} : { since }),
+    rows: [...new Set([...deciding, ...history.flatMap((step) => step.rulings)].map((ruling) => ruling.row))],
+    confidence: confidenceOf(deciding, asked, seenWhole),
     note: [...new Set(notes)].join(' '),
   };
+}
+
+function verdictOf(rulings: Ruling[]): Asked['asked'] {
+  if (rulings.some((ruling) => ruling.asked === 'yes')) return 'yes';
+  return rulings.some((ruling) => ruling.asked === 'depends') ? 'depends' : 'no';
+}
+
+/** The editions from this one back that asked as much, newest first, each with the rulings that say so. */
+function historyOf(
+  rulingsAt: RulingsAt,
+  edition: number,
+  asked: 'yes' | 'depends',
+): { edition: number; rulings: Ruling[] }[] {
+  const history = [];
+  for (const printed of NEC_EDITIONS.filter((candidate) => candidate <= edition).toReversed()) {
+    const rulings = rulingsAt(printed);
+    const then = verdictOf(rulings);
+    if (then === 'no' || (asked === 'yes' && then === 'depends')) break;
+    history.push({ edition: printed, rulings: rulings.filter((ruling) => ruling.asked === then) });
+  }
+  return history;
+}
+
+/** One sure row is enough for "yes"; "depends" and "no" are only as sure as their weakest row. */
+function confidenceOf(deciding: Ruling[], asked: Asked['asked'], seenWhole: boolean): Confidence {
+  const ranks = deciding.map((ruling) => CONFIDENCES.indexOf(editionRow(ruling.row).confidence));
+  const rank = asked === 'yes' ? Math.min(...ranks) : Math.max(0, ...ranks);
+  return CONFIDENCES[seenWhole ? rank : Math.max(rank, CONFIDENCES.indexOf('medium'))] ?? 'low';
 }

@@ -1,48 +1,77 @@
 import { NEC_EDITIONS } from '../vocabulary';
 
-/** Years that a town may lag behind an edition; beyond that nothing is assumed. */
+/** Years that most towns lag behind an edition; some lag longer, and the words say so. */
 const USUAL_LAG_YEARS = 6;
+
+export type Adoption = { edition: number; from: string; source: string };
 
 /**
  * Edition of the model code that most likely stood when a house was built. With adoptions that the firm recorded (edition,
- * `from` as YYYY-MM-DD, source) the last one in force at the end of the year before; without, only a range of editions.
- * `range` is the oldest and newest edition that can have applied. Never throws. Adoption differs by town and is never
- * assumed (common practice).
+ * `from` as YYYY-MM-DD, source) the last one in force at the end of the year before, if none came in the year itself;
+ * otherwise `edition` is absent. `range` is the oldest and newest edition that can have applied. Never throws. Adoption
+ * differs by town and is never assumed (common practice).
  */
-export function editionInForce(p: {
-  yearBuilt: number;
-  adoptions: { edition: number; from: string; source: string }[];
-}): {
+export function editionInForce(p: { yearBuilt: number; adoptions: Adoption[] }): {
   edition?: number;
   range: [number, number];
   says: string;
 } {
   const { yearBuilt } = p;
-  const known = p.adoptions
-    .filter(({ from }) => Number(from.slice(0, 4)) <= yearBuilt)
-    .toSorted((a, b) => a.from.localeCompare(b.from));
-  const changing = known.filter(({ from }) => Number(from.slice(0, 4)) === yearBuilt);
-  const before = known.filter(({ from }) => Number(from.slice(0, 4)) < yearBuilt).at(-1);
-  const last = known.at(-1);
-  if (last && changing.length === 0) {
-    return {
-      edition: last.edition,
-      range: [last.edition, last.edition],
-      says: `The ${last.edition} edition, in force since ${last.from}. Source: ${last.source}.`,
-    };
-  }
-  if (last && before) {
-    return {
-      range: [before.edition, last.edition],
-      says: `The ${before.edition} or the ${last.edition} edition: the change came on ${last.from}, in the year of building. Source: ${last.source}.`,
-    };
-  }
-  const published = NEC_EDITIONS.filter((edition) => edition <= yearBuilt);
-  const newest = last?.edition ?? published.at(-1) ?? NEC_EDITIONS[0];
-  const oldest =
-    published.find((edition) => edition >= yearBuilt - USUAL_LAG_YEARS) ?? published.at(-1) ?? NEC_EDITIONS[0];
+  const dated = p.adoptions.toSorted((a, b) => (a.from < b.from ? -1 : Number(a.from > b.from)));
+  const before = dated.filter((adoption) => yearOf(adoption) < yearBuilt).at(-1);
+  const during = dated.filter((adoption) => yearOf(adoption) === yearBuilt);
+  const next = dated.find((adoption) => yearOf(adoption) > yearBuilt);
+  if (during.length > 0) return changed(yearBuilt, before, during);
+  if (before) return settled(yearBuilt, before);
+  return unrecorded(yearBuilt, next);
+}
+
+function settled(yearBuilt: number, { edition, from, source }: Adoption): ReturnType<typeof editionInForce> {
+  const permit =
+    yearOf({ from }) === yearBuilt - 1 ? ' A permit taken before that day may have stood under the one before.' : '';
   return {
-    range: [Math.min(oldest, newest), newest],
-    says: `No adoption is recorded for this place. A house of ${yearBuilt} may have been built under the ${Math.min(oldest, newest)} to ${newest} editions, or under none.`,
+    edition,
+    range: [edition, edition],
+    says: `The ${edition} edition, in force since ${from}. Source: ${source}.${permit}`,
   };
+}
+
+function changed(
+  yearBuilt: number,
+  before: Adoption | undefined,
+  during: Adoption[],
+): ReturnType<typeof editionInForce> {
+  const editions = during.map(({ edition }) => edition);
+  const changes = during.map(({ edition, from, source }) => `the ${edition} edition came on ${from} (${source})`);
+  const oldest = before?.edition ?? usualRange(yearBuilt, Math.min(...editions))[0];
+  const earlier = before
+    ? `Until then the ${before.edition} edition stood (${before.source}).`
+    : 'What stood until then is not recorded.';
+  return {
+    range: [Math.min(oldest, ...editions), Math.max(oldest, ...editions)],
+    says: `The edition changed in the year of building: ${changes.join(', ')}. ${earlier}`,
+  };
+}
+
+function unrecorded(yearBuilt: number, next: Adoption | undefined): ReturnType<typeof editionInForce> {
+  const [oldest, newest] = usualRange(yearBuilt, next ? next.edition - 1 : yearBuilt);
+  const editions = oldest === newest ? `the ${newest} edition` : `the ${oldest} to ${newest} editions`;
+  const later = next
+    ? ` The first recorded adoption is the ${next.edition} edition on ${next.from} (${next.source}).`
+    : '';
+  return {
+    range: [oldest, newest],
+    says: `No adoption is recorded for this place in ${yearBuilt}. The house may have been built under ${editions}, an older one, or none.${later}`,
+  };
+}
+
+/** Printed editions that a usual town can have had in force by then, none newer than `newest`. */
+function usualRange(yearBuilt: number, newest: number): [number, number] {
+  const printed = NEC_EDITIONS.filter((edition) => edition <= Math.min(yearBuilt, newest));
+  const last = printed.at(-1) ?? NEC_EDITIONS[0];
+  return [printed.find((edition) => edition >= yearBuilt - USUAL_LAG_YEARS) ?? last, last];
+}
+
+function yearOf({ from }: Pick<Adoption, 'from'>): number {
+  return Number(from.slice(0, 4));
 }

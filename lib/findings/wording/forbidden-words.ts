@@ -1,35 +1,51 @@
 import type { Locale } from '../vocabulary';
 
 export type ForbiddenWord = { word: string; at: number; why: string };
+type Rule = { pattern: RegExp; why: string };
 
 const LAW = 'A report says what was seen; whether a code is broken is for the authority to say.';
 const PROMISE = 'No reading proves that. Say what was read.';
 
-const ENGLISH: { pattern: RegExp; why: string }[] = [
-  { pattern: /\b(?:code )?violations?\b/giu, why: LAW },
+const ENGLISH: Rule[] = [
+  { pattern: /\b(?:code\s+)?violations?\b/giu, why: LAW },
   { pattern: /\bviolat(?:e|es|ed|ing)\b/giu, why: LAW },
-  { pattern: /\billegal(?:ly)?\b/giu, why: LAW },
-  { pattern: /\b(?:up )?to code\b/giu, why: LAW },
-  { pattern: /\bcode[- ]compliant\b/giu, why: LAW },
-  { pattern: /\bgrandfathered\b/giu, why: LAW },
+  { pattern: /\b(?:illegal|unlawful)(?:ly)?\b/giu, why: LAW },
+  { pattern: /\b(?:up\s+)?to\s+code\b/giu, why: LAW },
+  {
+    pattern: /\b(?:code[-\s]+compliant|meets?\s+(?:the\s+)?code|compl(?:y|ies)\s+with\s+(?:the\s+)?code)\b/giu,
+    why: LAW,
+  },
+  { pattern: /\bgrandfather(?:ed|ing)\b/giu, why: LAW },
   { pattern: /\bpassed\b/giu, why: PROMISE },
-  { pattern: /\bfailed inspection\b/giu, why: LAW },
-  { pattern: /\bwired correctly\b|\bcorrectly wired\b/giu, why: PROMISE },
-  { pattern: /\bproperly grounded\b/giu, why: PROMISE },
-  { pattern: /\b(?:is|are|was|were|now|be) (?:perfectly |completely |entirely )?safe\b/giu, why: PROMISE },
-  { pattern: /\bok(?:ay)?\b/giu, why: PROMISE },
+  { pattern: /\bfail(?:s|ed)?\s+(?:the\s+)?inspection\b/giu, why: LAW },
+  {
+    pattern: /\b(?:(?:wired|grounded)\s+(?:correctly|properly)|(?:correctly|properly)\s+(?:wired|grounded))\b/giu,
+    why: PROMISE,
+  },
+  // "Not safe" and "a safe distance" promise nothing.
+  { pattern: /(?<!\b(?:not|never|nor)\s+)(?<!-)\bsafe\b(?!\s+distance)/giu, why: PROMISE },
+  // Oklahoma before a ZIP code is no verdict.
+  { pattern: /\b(?:ok|okay|o\.k\.)(?![\p{L}\p{N}])(?!\s+\d{5})/giu, why: PROMISE },
 ];
 
-const SPANISH: { pattern: RegExp; why: string }[] = [
-  { pattern: /(?<!\p{L})viola(?:ción|ciones)(?!\p{L})/giu, why: LAW },
+const SPANISH: Rule[] = [
+  { pattern: /(?<!\p{L})viola(?:ción|ciones|n)?(?!\p{L})/giu, why: LAW },
   { pattern: /(?<!\p{L})ilegal(?:es|mente)?(?!\p{L})/giu, why: LAW },
-  { pattern: /(?<!\p{L})cumple con el código(?!\p{L})/giu, why: LAW },
+  { pattern: /(?<!\p{L})(?:cumplen?\s+con\s+el|conforme\s+al|según\s+el)\s+código(?!\p{L})/giu, why: LAW },
+  { pattern: /(?<!\p{L})(?:pasó|aprobó|reprobó)\s+la\s+inspección(?!\p{L})/giu, why: LAW },
   { pattern: /(?<!\p{L})aprobad[oa]s?(?!\p{L})/giu, why: PROMISE },
-  { pattern: /(?<!\p{L})bien (?:conectad|aterrizad)[oa]s?(?!\p{L})/giu, why: PROMISE },
-  { pattern: /(?<!\p{L})es segur[oa](?!\p{L})/giu, why: PROMISE },
+  {
+    pattern:
+      /(?<!\p{L})(?:bien|correctamente)\s+(?:conectad|cablead|aterrizad)[oa]s?(?!\p{L})|(?<!\p{L})(?:conectad|cablead|aterrizad)[oa]s?\s+correctamente(?!\p{L})/giu,
+    why: PROMISE,
+  },
+  { pattern: /(?<!no\s)(?<!\p{L})(?:es|son|está|están)\s+segur[oa]s?(?!\p{L})/giu, why: PROMISE },
 ];
 
-/** Words that the program never prints of a finding, each with its place in the text (0 is the first character) and why. */
+/**
+ * Words that the program never prints of a finding, each with its place in the text (0 is the first character) and why,
+ * in the order of the text. Whole words only; a line break inside a phrase hides nothing. Never throws.
+ */
 export function findForbiddenWords(text: string, locale: Locale = 'en'): ForbiddenWord[] {
   const rules = locale === 'es' ? SPANISH : ENGLISH;
   return rules
