@@ -48,15 +48,12 @@ export function phoneStore(): PhoneStore {
 /** One inspection on this phone: what was served, what waits to go, and the way to add to it. */
 export function useWalk(inspectionId: string | null): Walk {
   const [person, setPerson] = useState<WalkPerson | null>(null);
-  const [served, setServed] = useState<ServedInspection | null>(null);
-  const [outbox, setOutbox] = useState<OutboxEntry[]>([]);
-  const [photos, setPhotos] = useState<PhonePhoto[]>([]);
   const [link, setLink] = useState<Link>('connected');
   const [missing, setMissing] = useState(false);
   const userId = person?.userId;
 
   usePerson(setPerson, setLink);
-  useStored(userId, inspectionId, { setServed, setOutbox, setPhotos });
+  const { served, outbox, photos } = useHeld(userId, inspectionId);
 
   const refresh = useCallback(async () => {
     if (!userId || !inspectionId) return;
@@ -122,28 +119,26 @@ function usePerson(setPerson: (person: WalkPerson) => void, setLink: (link: Link
   }, [setPerson, setLink]);
 }
 
-type Setters = {
-  setServed: (served: ServedInspection | null) => void;
-  setOutbox: (entries: OutboxEntry[]) => void;
-  setPhotos: (photos: PhonePhoto[]) => void;
-};
+/** What this phone holds of an inspection, all of one moment: else a row would flicker between the outbox and the served state. */
+type Held = { served: ServedInspection | null; outbox: OutboxEntry[]; photos: PhonePhoto[] };
+const NOTHING: Held = { served: null, outbox: [], photos: [] };
 
-function useStored(
-  userId: string | undefined,
-  inspectionId: string | null,
-  { setServed, setOutbox, setPhotos }: Setters,
-) {
+function useHeld(userId: string | undefined, inspectionId: string | null): Held {
+  const [held, setHeld] = useState<Held>(NOTHING);
   useEffect(() => {
     if (!userId || !inspectionId) return;
     const store = phoneStore();
     const own = (row: { userId: string }) => row.userId === userId;
-    const watched = [
-      liveQuery(async () => (await store.served.get(servedKey(userId, inspectionId))) ?? null).subscribe(setServed),
-      liveQuery(() => store.outbox.where('inspectionId').equals(inspectionId).and(own).toArray()).subscribe(setOutbox),
-      liveQuery(() => store.photos.where('inspectionId').equals(inspectionId).and(own).toArray()).subscribe(setPhotos),
-    ];
-    return () => watched.forEach((subscription) => subscription.unsubscribe());
-  }, [userId, inspectionId, setServed, setOutbox, setPhotos]);
+    const read = () =>
+      store.transaction('r', store.served, store.outbox, store.photos, async () => ({
+        served: (await store.served.get(servedKey(userId, inspectionId))) ?? null,
+        outbox: await store.outbox.where('inspectionId').equals(inspectionId).and(own).toArray(),
+        photos: await store.photos.where('inspectionId').equals(inspectionId).and(own).toArray(),
+      }));
+    const watched = liveQuery(read).subscribe(setHeld);
+    return () => watched.unsubscribe();
+  }, [userId, inspectionId]);
+  return held;
 }
 
 /** Online again, looked at again, shown again, and every half minute while it is open. */
