@@ -1,4 +1,4 @@
-import type { SinkKind } from '../vocabulary';
+import type { PlaceKind, SinkKind } from '../vocabulary';
 import { by, depends, yes, type Ruling, type Spot } from './ruling';
 import { measureNote, sinkWithin, within } from './distance';
 
@@ -9,6 +9,8 @@ const EARLY_POOL_REACH_FT = 15;
 /** The three kinds of sink that the 2005 text names. */
 const NAMED_SINKS: SinkKind[] = ['laundry', 'utility', 'wet-bar'];
 const FOOD_SINKS: SinkKind[] = ['wet-bar', 'kitchen'];
+/** Places that a pool may be in or beside; elsewhere a wall ends the path. */
+const POOLSIDE: PlaceKind[] = ['pool-area', 'outdoors', 'sunroom', 'accessory-building', 'boathouse'];
 
 /** What the editions ask near a sink, a tub or shower, and a pool, whatever the kind of place. */
 export function nearWaterRules(spot: Spot): Ruling[] {
@@ -32,10 +34,10 @@ function sinkRules(spot: Spot): Ruling[] {
 
 /** A sink whose kind was not told is taken for the one that belongs to the place. */
 function kindOfSink({ place, sinkKind }: Spot): SinkKind | undefined {
+  if (place === 'wet-bar') return 'wet-bar';
   if (sinkKind !== undefined) return sinkKind;
   if (place === 'kitchen-wall' || place === 'dishwasher') return 'kitchen';
-  if (place === 'laundry-area') return 'laundry';
-  return place === 'wet-bar' ? 'wet-bar' : undefined;
+  return place === 'laundry-area' ? 'laundry' : undefined;
 }
 
 /** Food is made there, with a sink at any distance: only some of such a room may belong to that area. */
@@ -55,8 +57,7 @@ function tubRules({ edition, tubOrShowerFt }: Spot): Ruling[] {
 
 function poolRules({ edition, place, poolFt }: Spot): Ruling[] {
   if (edition < 1971) return [];
-  const matters = place === 'pool-area' || place === 'outdoors' || poolFt !== undefined;
-  if (!matters) return [];
+  if (poolFt === undefined && !POOLSIDE.includes(place)) return [];
   const near = within(poolFt, POOL_REACH_FT);
   if (edition >= 1984) return by(near, 'gf02', `Within ${POOL_REACH_FT} ft of a pool wall.`);
   const note = `Within ${EARLY_POOL_REACH_FT} ft of a pool wall; one published list says ${POOL_REACH_FT} ft.`;
