@@ -2,7 +2,7 @@
 
 import { useMemo } from 'react';
 import { ReceptacleDrawing } from '@/components/drawings/receptacle-drawing';
-import { conditionName, diagnoseWiring, evaluateInspection, wiringEvidence } from '@/lib/findings';
+import { conditionName, diagnoseWiring, wiringEvidence } from '@/lib/findings';
 import { inspectionFacts } from '@/lib/schemas/inspection-facts';
 import type { WalkReceptacle, WalkState } from '@/lib/schemas/walk';
 import type { Walk } from '@/lib/walk/use-walk';
@@ -10,6 +10,7 @@ import { EvidenceSection } from './evidence-section';
 import { lampsInWords } from './labels';
 import { PhotoButton } from './photo-button';
 import { standingReadings } from './progress';
+import { ToldLink } from './told-link';
 import { addressOf, goTo } from './walk-address';
 import { WalkButton } from './walk-button';
 
@@ -26,7 +27,6 @@ export function ResultScreen({
   const facts = useMemo(() => inspectionFacts(state), [state]);
   const evidence = useMemo(() => wiringEvidence(facts, receptacle.id), [facts, receptacle.id]);
   const diagnosis = useMemo(() => diagnoseWiring(evidence), [evidence]);
-  const danger = useMemo(() => dangerOf(facts, receptacle.id), [facts, receptacle.id]);
   const [leading, ...others] = diagnosis.candidates;
 
   async function undo() {
@@ -65,14 +65,7 @@ export function ResultScreen({
             <b>Not proven:</b> {diagnosis.notProven.join(' ')}
           </p>
         </section>
-        {danger && (
-          <a
-            className="flex min-h-[56px] items-center justify-center rounded-[2px] border-(length:--line-2) border-ink px-4 font-bold"
-            href={addressOf(state.inspection.id, { kind: 'told', receptacleId: receptacle.id })}
-          >
-            Stop using it now: say who was told
-          </a>
-        )}
+        <ToldLink state={state} facts={facts} receptacleId={receptacle.id} />
         <EvidenceSection
           walk={walk}
           state={state}
@@ -106,17 +99,5 @@ export function ResultScreen({
         </a>
       </div>
     </div>
-  );
-}
-
-/** A finding to stop using, about this receptacle, of which nobody was told yet. */
-function dangerOf(facts: ReturnType<typeof inspectionFacts>, receptacleId: string): boolean {
-  if (facts.notices.some((notice) => notice.kind === 'danger-told' && notice.receptacleId === receptacleId))
-    return false;
-  return evaluateInspection(facts).findings.some(
-    (finding) =>
-      finding.urgency === 'U1' &&
-      'receptacleIds' in finding.subject &&
-      finding.subject.receptacleIds.includes(receptacleId),
   );
 }

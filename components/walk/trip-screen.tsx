@@ -1,8 +1,10 @@
 'use client';
 
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
+import { inspectionFacts } from '@/lib/schemas/inspection-facts';
 import { AfciTrialForm } from './afci-trial-form';
 import { GfciTrialForm } from './gfci-trial-form';
+import { ToldLink } from './told-link';
 import type { TrialProps } from './trial-parts';
 import { DoNotTrip, TripCard } from './trip-cards';
 import { addressOf } from './walk-address';
@@ -14,6 +16,7 @@ type Kind = 'gfci' | 'afci';
 export function TripScreen({ walk, state, receptacle }: TrialProps) {
   const [kind, setKind] = useState<Kind>(receptacle.device === 'afci-receptacle' ? 'afci' : 'gfci');
   const [anyway, setAnyway] = useState(false);
+  const facts = useMemo(() => inspectionFacts(state), [state]);
 
   if (!state.inspection.tripConfirmed) return <TripCard walk={walk} />;
   if (receptacle.doNotTrip && !anyway)
@@ -35,12 +38,13 @@ export function TripScreen({ walk, state, receptacle }: TrialProps) {
         ) : (
           <AfciTrialForm walk={walk} state={state} receptacle={receptacle} />
         )}
+        <ToldLink state={state} facts={facts} receptacleId={receptacle.id} />
       </div>
       <a
         className="flex min-h-[72px] items-center justify-center rounded-[2px] bg-inverse px-4 text-l font-bold text-on-inverse"
         href={addressOf(state.inspection.id, { kind: 'area', areaId: receptacle.areaId })}
       >
-        Back to {state.areas.find((area) => area.id === receptacle.areaId)?.name ?? 'the area'}
+        Done, next
       </a>
     </div>
   );
