@@ -71,6 +71,29 @@ describe('how far a sink is', () => {
   });
 });
 
+describe('an exception of its time', () => {
+  test.each([
+    ['crawl space until 1999', { place: 'crawl-space', dedicatedAppliance: true }, 1996, 1999],
+    ['unfinished basement until 2008', { place: 'basement', finished: false, dedicatedAppliance: true }, 2005, 2008],
+    ['garage until 2008', { place: 'garage', dedicatedAppliance: true }, 2005, 2008],
+    ['garage ceiling until 2008', { place: 'garage', heightFt: 9 }, 2005, 2008],
+  ] as [string, Omit<AskedPlace, 'edition'>, number, number][])('%s depends: %#', (_, point, last, first) => {
+    expect(gfci({ ...dry, ...point, edition: last }).asked).toBe('depends');
+    expect(gfci({ ...dry, ...point, edition: first }).asked).toBe('yes');
+  });
+
+  test('stands outdoors for dedicated de-icing', () => {
+    expect(gfci({ ...dry, place: 'outdoors', edition: 2020, dedicatedAppliance: true }).asked).toBe('depends');
+  });
+
+  test('spares an outbuilding whose floor is not at grade, until 2026', () => {
+    const shed: AskedPlace = { ...dry, place: 'accessory-building', edition: 2023, finished: false };
+    expect(gfci({ ...shed, gradeAccess: false }).asked).toBe('no');
+    expect(gfci(shed).asked).toBe('depends');
+    expect(gfci({ ...shed, gradeAccess: false, edition: 2026 }).asked).toBe('yes');
+  });
+});
+
 describe('several places at once', () => {
   test('are a union', () => {
     const basement: AskedPlace = { place: 'basement', edition: 2017, finished: true, ...dry };

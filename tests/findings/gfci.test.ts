@@ -219,6 +219,10 @@ describe('a time that an analyzer showed', () => {
   });
 });
 
+test('a device that was found tripped and reset is tried like any other', () => {
+  expect(assessGfci({ ...works, deadBefore: true }).verdict).toBe('works');
+});
+
 describe('a dim lamp', () => {
   test('holds the test where it is unsound both lit and off', () => {
     expect(assessGfci({ ...works, lamps: lamps('0d0') }).row).toBe('D00');
