@@ -1,8 +1,11 @@
 import type { SlotPattern, WiringCondition } from '@/lib/findings/vocabulary';
 
 /**
- * Millimetres, origin at the center of the face, y down, seen from the front. Blade spacing of 5-15R (12.7 mm, 1/2 in)
- * and the order of slots are those of NEMA WD 6; slot sizes and face outlines are from memory.
+ * Millimeters, origin at the center of the face, y down, seen from the front, ground below. Of 1-15R, 5-15R and 5-20R
+ * the spacing (0.500 in), the slots (0.075 by 0.330 and 0.265 in), the arm of the T (0.290 in over all, pointing out),
+ * the ground (0.205 in, 0.468 in below the blades) are the least sizes of ANSI/NEMA WD 6-2016, read from a published
+ * table of them and not from the standard itself. 6-15R and 6-20R keep those slots, but their spacing, all of 10-30R,
+ * 14-30R and 14-50R, and every outline of a face are from memory.
  */
 export type Terminal = 'H' | 'N' | 'G' | 'X' | 'Y';
 export type SlotShape = 'blade' | 'tee-left' | 'tee-right' | 'ell' | 'arch';
@@ -16,8 +19,6 @@ export type Slot = {
   turn: number;
 };
 export type Face = { outline: 'flat-round' | 'round'; radius: number; flat: number; volts: 120 | 240; slots: Slot[] };
-
-export const MM_PER_INCH = 25.4;
 
 const slot = (
   terminal: Terminal,
@@ -44,14 +45,27 @@ const small = (volts: 120 | 240, slots: Slot[]): Face => ({
   slots,
 });
 const large = (slots: Slot[]): Face => ({ outline: 'round', radius: 27, flat: 27, volts: 240, slots });
+const BLADE = 1.9;
+const WIDE = 8.4;
+const NARROW = 6.7;
 const ARCH = slot('G', 'arch', 0, 6.9, 5.2, 5.2);
+const neutralAt = (y: number, shape: 'blade' | 'tee-left' = 'blade') => slot('N', shape, -6.35, y, BLADE, WIDE);
+const hotAt = (y: number) => slot('H', 'blade', 6.35, y, BLADE, NARROW);
 
 export const FACES: Record<SlotPattern, Face> = {
-  '5-15R': small(120, [slot('N', 'blade', -6.35, -5, 2.3, 8.4), slot('H', 'blade', 6.35, -5, 2.3, 6.9), ARCH]),
-  '5-20R': small(120, [slot('N', 'tee-left', -6.35, -5, 2.3, 8.4), slot('H', 'blade', 6.35, -5, 2.3, 6.9), ARCH]),
-  '1-15R': small(120, [slot('N', 'blade', -6.35, 0, 2.3, 8.4), slot('H', 'blade', 6.35, 0, 2.3, 6.9)]),
-  '6-15R': small(240, [slot('X', 'blade', -8.3, -5, 2.3, 7.4, 90), slot('Y', 'blade', 8.3, -5, 2.3, 7.4, 90), ARCH]),
-  '6-20R': small(240, [slot('X', 'blade', -8.3, -5, 2.3, 7.4, 90), slot('Y', 'tee-right', 6.35, -5, 2.3, 7.4), ARCH]),
+  '5-15R': small(120, [neutralAt(-5), hotAt(-5), ARCH]),
+  '5-20R': small(120, [neutralAt(-5, 'tee-left'), hotAt(-5), ARCH]),
+  '1-15R': small(120, [neutralAt(0), hotAt(0)]),
+  '6-15R': small(240, [
+    slot('X', 'blade', -8.3, -5, BLADE, NARROW, 90),
+    slot('Y', 'blade', 8.3, -5, BLADE, NARROW, 90),
+    ARCH,
+  ]),
+  '6-20R': small(240, [
+    slot('X', 'blade', -8.3, -5, BLADE, NARROW, 90),
+    slot('Y', 'tee-right', 6.35, -5, BLADE, NARROW),
+    ARCH,
+  ]),
   '10-30R': large([
     slot('X', 'blade', -9.6, -5.5, 2.7, 11, 30),
     slot('Y', 'blade', 9.6, -5.5, 2.7, 11, -30),
@@ -78,9 +92,13 @@ export type Wiring = {
   wires: Partial<Record<Screw, Supply>>;
   open?: Screw[];
   poor?: Screw[];
+  /** An open wire is drawn broken near the supply, or near the screw where other wires cross below. */
+  breakAt?: 'supply' | 'screw';
   jumper?: boolean;
-  /** What joins hot to an open wire: a load that is plugged in, one on the other leg, or a leak. */
-  bridge?: { from: 'H'; to: Screw; word: string };
+  /** What joins hot to an open wire: a load that is plugged in, or a leak. */
+  bridge?: { to: 'N' | 'G'; word: string };
+  /** Loads of the other leg hang on the same neutral. */
+  otherLeg?: boolean;
   live?: ('N' | 'G' | 'H')[];
   /** A word at the supply, for what lies upstream. */
   upstream?: string;
@@ -97,7 +115,7 @@ export const WIRINGS: Record<WiringCondition, Wiring> = {
   'open-neutral-with-load': {
     wires: straight,
     open: ['N'],
-    bridge: { from: 'H', to: 'N', word: 'LOAD' },
+    bridge: { to: 'N', word: 'LOAD' },
     live: ['N'],
     says: 'The neutral is open upstream, and something that is on makes the neutral slot live.',
   },
@@ -116,18 +134,21 @@ export const WIRINGS: Record<WiringCondition, Wiring> = {
   'hot-on-neutral-hot-open': {
     wires: { N: 'H', G: 'G', H: 'N' },
     open: ['H'],
+    breakAt: 'screw',
     live: ['N'],
     says: 'The hot wire is on the neutral screw. The hot screw has no whole wire.',
   },
   'hot-on-ground-hot-open': {
     wires: { N: 'N', G: 'H', H: 'G' },
     open: ['H'],
+    breakAt: 'screw',
     live: ['G'],
     says: 'The hot wire is on the ground screw. The hot screw has no whole wire. The ground slot is live.',
   },
   'neutral-on-hot-hot-on-ground-neutral-open': {
     wires: { N: 'G', G: 'H', H: 'N' },
     open: ['N'],
+    breakAt: 'screw',
     live: ['G'],
     says: 'The neutral wire is on the hot screw and the hot wire on the ground screw. The ground slot is live.',
   },
@@ -149,6 +170,7 @@ export const WIRINGS: Record<WiringCondition, Wiring> = {
   'open-ground-hot-neutral-reversed': {
     wires: { N: 'H', G: 'G', H: 'N' },
     open: ['G'],
+    breakAt: 'screw',
     live: ['N'],
     says: 'Hot and neutral are reversed, and the ground wire is open.',
   },
@@ -166,7 +188,8 @@ export const WIRINGS: Record<WiringCondition, Wiring> = {
   'shared-neutral-open': {
     wires: straight,
     open: ['N'],
-    bridge: { from: 'H', to: 'N', word: 'OTHER LEG' },
+    bridge: { to: 'N', word: 'LOAD' },
+    otherLeg: true,
     live: ['N'],
     says: 'A neutral shared by two legs is open upstream. The loads of both legs now share 240 volts.',
   },
@@ -182,14 +205,14 @@ export const WIRINGS: Record<WiringCondition, Wiring> = {
     wires: { N: 'N', H: 'H' },
     open: ['N'],
     jumper: true,
-    bridge: { from: 'H', to: 'N', word: 'LOAD' },
+    bridge: { to: 'N', word: 'LOAD' },
     live: ['N', 'G'],
     says: 'A jumper joins the ground screw to a neutral that is open upstream. All three slots are live.',
   },
   'open-ground-energized': {
     wires: straight,
     open: ['G'],
-    bridge: { from: 'H', to: 'G', word: 'LEAK' },
+    bridge: { to: 'G', word: 'LEAK' },
     live: ['G'],
     says: 'The ground wire is open, and a fault on something connected makes it live.',
   },

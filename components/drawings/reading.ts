@@ -1,7 +1,7 @@
 import type { LampPattern, VoltTrio } from '@/lib/findings/facts';
-import type { Lamp, SlotPattern } from '@/lib/findings/vocabulary';
-import { outlineShape, slotShapes } from './face';
-import { FACES, type Face, type Slot } from './geometry';
+import type { DeviceKind, Lamp, SlotPattern } from '@/lib/findings/vocabulary';
+import { hasButtons, outlineShape, RECTANGLE, slotShapes } from './face';
+import { FACES, type Face, type Slot, type Terminal } from './geometry';
 import { mm, type Drawing, type Role, type Shape } from './shapes';
 
 type State = Lamp | 'none' | 'volts';
@@ -10,12 +10,23 @@ export type Ring = {
   lamps?: Partial<LampPattern>;
   volts?: Pick<VoltTrio, 'hn' | 'hg' | 'ng'>;
   pad?: boolean;
+  device?: DeviceKind;
+  /** Height on screen in pixels, or in print in points; what would be too small to read is left out. */
+  size?: number;
 };
 const KEYS = ['hn', 'hg', 'ng'] as const;
 const SPOKEN: Record<State, string> = { lit: 'lit', dim: 'dim', off: 'off', none: 'not read', volts: '' };
+const TERMINAL_NAME: Record<Terminal, string> = {
+  H: 'hot',
+  N: 'neutral',
+  G: 'ground',
+  X: 'one hot',
+  Y: 'the other hot',
+};
 
 /** What was read: three lamps or three voltages on a ring around the face. Evidence only. */
-export function readingDrawing({ pattern, lamps, volts, pad = false }: Ring): Drawing {
+export function readingDrawing(ring: Ring): Drawing {
+  const { pattern, lamps, volts, pad = false, device, size = FULL_SIZE } = ring;
   const face = FACES[pattern];
   const k = face.outline === 'round' ? 27 / 17.05 : 1;
   const radius = (pad ? 25.5 : 23.5) * k;
@@ -24,30 +35,56 @@ export function readingDrawing({ pattern, lamps, volts, pad = false }: Ring): Dr
   const states = links.map((key): State => (volts ? 'volts' : (lamps?.[key] ?? 'none')));
   const level = face.slots.length === 2 || k > 1 ? 0 : -5;
   const at = markPoints(radius);
-  const margin = (pad ? 37 : 33) * k;
+  const margin = (pad ? 37 : size < LINES_FROM ? 30.5 : 33) * k;
+  const lampRadius = (pad ? 7 : size < LINES_FROM ? 5.6 : 4.6) * k;
 
   const shapes: Shape[] = [
     ...arcs(radius, level)
       .slice(0, links.length)
       .map((d, i): Shape => ({ kind: 'path', role: linkRole(states[i] ?? 'none'), d })),
-    outlineShape(face),
+    hasButtons(device) && k === 1 ? RECTANGLE : outlineShape(face),
     ...slotShapes(face),
-    ...tapShapes(face, radius, level, k, names),
+    ...(size < LINES_FROM ? [] : tapShapes(face, { radius, level, k, names, letters: size >= LETTERS_FROM })),
     ...links.flatMap((key, i) => {
       const [x, y] = at[i] ?? [0, 0];
       if (volts) return plate(x, y, k, voltWords(volts[key]));
-      return lamp(x, y, (pad ? 7 : 4.6) * k, states[i] ?? 'none', pad ? names.pairs[i] : undefined, pad);
+      return lamp(x, y, {
+        r: lampRadius,
+        state: states[i] ?? 'none',
+        tag: pad ? names.pairs[i] : undefined,
+        pad,
+        size,
+      });
     }),
   ];
   const said = links.map(
-    (key, i) => `${names.pairs[i]} ${volts ? `${voltWords(volts[key])} volts` : SPOKEN[states[i] ?? 'none']}`,
+    (key, i) => `${names.spoken[i]} ${volts ? `${voltWords(volts[key])} volts` : SPOKEN[states[i] ?? 'none']}`,
   );
   return { box: [-margin, -margin, 2 * margin, 2 * margin], shapes, label: `${pattern}: ${said.join(', ')}` };
 }
 
-function terminalNames(face: Face, pattern: SlotPattern) {
-  const [left, right, low] = face.volts === 240 ? ['X', 'Y', pattern.startsWith('6') ? 'G' : 'N'] : ['N', 'H', 'G'];
-  return { left, right, low, pairs: [`${right}–${left}`, `${right}–${low}`, `${left}–${low}`] };
+const FULL_SIZE = 400;
+const LINES_FROM = 80;
+const CROSSES_FROM = 110;
+const LETTERS_FROM = 140;
+
+type Names = { left: Terminal; right: Terminal; low: Terminal; pairs: string[]; spoken: string[] };
+
+function terminalNames(face: Face, pattern: SlotPattern): Names {
+  const [left, right, low]: [Terminal, Terminal, Terminal] =
+    face.volts === 240 ? ['X', 'Y', pattern.startsWith('6') ? 'G' : 'N'] : ['N', 'H', 'G'];
+  const pairs = [
+    [right, left],
+    [right, low],
+    [left, low],
+  ] as const;
+  return {
+    left,
+    right,
+    low,
+    pairs: pairs.map((pair) => pair.join('–')),
+    spoken: pairs.map(([a, b]) => `${TERMINAL_NAME[a]} to ${TERMINAL_NAME[b]}`),
+  };
 }
 
 function markPoints(radius: number): [number, number][] {
@@ -75,14 +112,10 @@ function linkRole(state: State): Role {
   return state === 'none' ? 'link-none' : 'link-off';
 }
 
+type Taps = { radius: number; level: number; k: number; names: Names; letters: boolean };
+
 /** Lines from the slots to the ring, with the letters of the terminals. */
-function tapShapes(
-  face: Face,
-  radius: number,
-  level: number,
-  k: number,
-  names: { left?: string; right?: string; low?: string },
-): Shape[] {
+function tapShapes(face: Face, { radius, level, k, names, letters }: Taps): Shape[] {
   const [left, right] = face.slots;
   if (!left || !right) return [];
   const low = face.slots.find((slot) => slot.y > 4);
@@ -91,7 +124,7 @@ function tapShapes(
   const r = mm(radius);
   const down = low ? `M0 ${mm(low.y + low.height / 2 + 0.7)}V${r}` : '';
   const dot = (cx: number, cy: number): Shape => ({ kind: 'circle', role: 'dot', cx, cy, r: mm(0.9 * k) });
-  const letter = (tx: number, ty: number, words = ''): Shape => ({
+  const letter = (tx: number, ty: number, words: string): Shape => ({
     kind: 'text',
     role: 'letter',
     x: mm(tx),
@@ -103,9 +136,9 @@ function tapShapes(
     { kind: 'path', role: 'tap', d: `M${edge(left, -1)} ${y}H${-x}M${edge(right, 1)} ${y}H${x}${down}` },
     dot(-x, y),
     dot(x, y),
-    letter(-x - 3.6 * k, y + 1.4 * k, names.left),
-    letter(x + 3.6 * k, y + 1.4 * k, names.right),
-    ...(low ? [dot(0, r), letter(0, radius + 5.4 * k, names.low)] : []),
+    ...(low ? [dot(0, r)] : []),
+    ...(letters ? [letter(-x - 3.6 * k, y + 1.4 * k, names.left), letter(x + 3.6 * k, y + 1.4 * k, names.right)] : []),
+    ...(letters && low ? [letter(0, radius + 5.4 * k, names.low)] : []),
   ];
 }
 
@@ -114,18 +147,22 @@ function edge({ shape, x, width, height, turn }: Slot, side: -1 | 1): number {
   return mm(x + side * (reach + (shape.startsWith('tee') ? 6 : 0) + 0.7));
 }
 
-function lamp(x: number, y: number, r: number, state: State, tag: string | undefined, pad: boolean): Shape[] {
+type LampMark = { r: number; state: State; tag: string | undefined; pad: boolean; size: number };
+
+function lamp(x: number, y: number, { r, state, tag, pad, size }: LampMark): Shape[] {
   const d = r * Math.SQRT1_2;
   const role: Role = `${pad ? 'pad' : 'lamp'}-${state === 'lit' ? 'lit' : state === 'none' ? 'none' : 'off'}`;
   const shapes: Shape[] = [];
-  if (state === 'lit') shapes.push({ kind: 'path', role: 'rays', d: rays(x, y, r) });
+  if (state === 'lit' && size >= LINES_FROM) shapes.push({ kind: 'path', role: 'rays', d: rays(x, y, r) });
   shapes.push({ kind: 'circle', role, cx: mm(x), cy: mm(y), r: mm(r) });
   if (state === 'dim')
     shapes.push({ kind: 'path', role: 'half', d: `M${mm(x - r)} ${mm(y)}a${mm(r)} ${mm(r)} 0 0 0 ${mm(2 * r)} 0z` });
-  if (state !== 'none') {
+  if (state !== 'none' && size >= CROSSES_FROM) {
     const cross = `M${mm(x - d)} ${mm(y - d)}L${mm(x + d)} ${mm(y + d)}M${mm(x + d)} ${mm(y - d)}L${mm(x - d)} ${mm(y + d)}`;
     shapes.push({ kind: 'path', role: state === 'lit' ? 'cross-lit' : 'cross', d: cross });
-  } else if (tag) shapes.push({ kind: 'text', role: 'tag', x: mm(x), y: mm(y + 1.35), size: 3.7, words: tag });
+  }
+  if (state === 'none' && tag)
+    shapes.push({ kind: 'text', role: 'tag', x: mm(x), y: mm(y + 1.35), size: 3.7, words: tag });
   return shapes;
 }
 

@@ -7,6 +7,10 @@ export type Role =
   | 'strike'
   | 'button'
   | 'button-text'
+  | 'button-pressed'
+  | 'button-pressed-text'
+  | 'pilot'
+  | 'pilot-on'
   | 'link-none'
   | 'link-off'
   | 'link-lit'
@@ -75,6 +79,10 @@ export const LOOKS: Record<Role, Look> = {
   strike: { stroke: 'ink', line: 1.4 },
   button: { fill: 'sheet', stroke: 'ink', line: 1 },
   'button-text': { fill: 'ink' },
+  'button-pressed': { fill: 'ink', stroke: 'ink', line: 1 },
+  'button-pressed-text': { fill: 'paper' },
+  pilot: { stroke: 'ink', line: 1 },
+  'pilot-on': { fill: 'ink', stroke: 'ink', line: 1 },
   'link-none': { stroke: 'rule', line: 1, dash: [0.1, 3] },
   'link-off': { stroke: 'rule', line: 1 },
   'link-lit': { stroke: 'ink', line: 2.4 },

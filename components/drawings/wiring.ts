@@ -20,7 +20,7 @@ export function wiringDrawing(pattern: SlotPattern, condition: WiringCondition):
   const wires = (['G', 'N', 'H'] as const).flatMap((screw) => wireShapes(wiring, screw));
   const marks = (['G', 'N', 'H'] as const).flatMap((screw) => faultMarks(wiring, screw));
   return {
-    box: [-34, -20, 68, 80],
+    box: [-37, -20, 74, 80],
     shapes: [
       { kind: 'rect', role: 'body', x: -18.4, y: -16.4, width: 36.8, height: 33.6, rx: 1.6 },
       { kind: 'path', role: 'body', d: 'M18.4 -7h5.4v9h-5.4M-18.4 -7h-5.4v9h5.4M-4.4 17.2v6.6h8.8v-6.6' },
@@ -77,7 +77,7 @@ function at({ points }: Route, t: number): Point {
 
 function stretch(path: Route, from: number, to: number): string {
   const points = Array.from({ length: STEPS + 1 }, (_, i) => at(path, from + ((to - from) * i) / STEPS).join(' '));
-  return `M${points.join('L')}${to === 1 && path.tail !== undefined ? `V${path.tail}` : ''}`;
+  return `M${points.join('L')}`;
 }
 
 function wire(metal: Metal, d: string): Shape[] {
@@ -87,37 +87,74 @@ function wire(metal: Metal, d: string): Shape[] {
   return layers.map((role) => ({ kind: 'path', role, d }));
 }
 
-/** A break lies nearer the supply where a load hangs on the wire's end. */
-function cutOf(wiring: Wiring, screw: Screw): [number, number] {
-  return wiring.bridge?.to === screw ? [0.2, 0.36] : [0.34, 0.6];
+type Break = { below: string; above: string; from: Point; to: Point };
+
+/** The two ends of a broken wire; nearer the supply where a load hangs on the wire's end. */
+function breakOf(wiring: Wiring, screw: Screw, path: Route): Break {
+  const [sx, sy] = SCREW_AT[screw];
+  const tail = path.tail === undefined ? '' : `V${sy}`;
+  if (wiring.breakAt === 'screw' && tail) {
+    const [lower, upper] = [15, 8];
+    return {
+      below: `${stretch(path, 0, 1)}V${lower}`,
+      above: `M${sx} ${upper}V${sy}`,
+      from: [sx, lower],
+      to: [sx, upper],
+    };
+  }
+  const [start, end] =
+    wiring.breakAt === 'screw' ? [0.72, 0.92] : wiring.bridge?.to === screw ? [0.14, 0.36] : [0.34, 0.6];
+  return {
+    below: stretch(path, 0, start),
+    above: `${stretch(path, end, 1)}${tail}`,
+    from: at(path, start),
+    to: at(path, end),
+  };
 }
 
 function wireShapes(wiring: Wiring, screw: Screw): Shape[] {
   const from = wiring.wires[screw];
   if (!from) return [];
   const path = route(from, screw);
-  if (!wiring.open?.includes(screw)) return wire(METAL[from], stretch(path, 0, 1));
-  const [start, end] = cutOf(wiring, screw);
-  return [...wire(METAL[from], stretch(path, 0, start)), ...wire(METAL[from], stretch(path, end, 1))];
+  if (!wiring.open?.includes(screw) && !wiring.poor?.includes(screw)) {
+    const tail = path.tail === undefined ? '' : `V${path.tail}`;
+    return wire(METAL[from], `${stretch(path, 0, 1)}${tail}`);
+  }
+  const { below, above } = breakOf(wiring, screw, path);
+  return [...wire(METAL[from], below), ...wire(METAL[from], above)];
 }
 
+/** A broken wire has a ring around nothing; a poor joint has a resistor in it. */
 function faultMarks(wiring: Wiring, screw: Screw): Shape[] {
   const from = wiring.wires[screw];
   const isOpen = wiring.open?.includes(screw);
   if (!from || (!isOpen && !wiring.poor?.includes(screw))) return [];
-  const [start, end] = cutOf(wiring, screw);
-  const [x, y] = at(route(from, screw), (start + end) / 2);
-  const words = isOpen ? 'OPEN' : 'POOR JOINT';
-  const away = (isOpen ? 11.2 : 15.5) * (screw === 'N' ? -1 : 1);
+  const gap = breakOf(wiring, screw, route(from, screw));
+  const [x, y]: Point = [mm((gap.from[0] + gap.to[0]) / 2), mm((gap.from[1] + gap.to[1]) / 2)];
+  const words = isOpen ? 'OPEN' : 'POOR';
+  const lift = wiring.breakAt === 'screw' && screw === 'G' ? 3.4 : 0;
+  const away = wiring.otherLeg ? 9.8 : 11.2 * (screw === 'N' ? -1 : 1);
   const joint: Shape[] = isOpen
-    ? []
-    : [{ kind: 'path', role: 'bridge', d: `M${mm(x - 3)} ${mm(y)}l1.2 -2.2 2 4.4 2 -4.4 1.2 2.2` }];
-  return [{ kind: 'circle', role: 'open', cx: x, cy: y, r: 4.1 }, ...joint, ...flag(clampX(x + away, words), y, words)];
+    ? [{ kind: 'circle', role: 'open', cx: x, cy: y, r: 4.1 }]
+    : [{ kind: 'path', role: 'bridge', d: resistor(gap.from, gap.to) }];
+  return [...joint, ...flag(clampX(x + away, words), mm(y - lift), words)];
+}
+
+/** A zigzag from one point to another. */
+function resistor([x1, y1]: Point, [x2, y2]: Point): string {
+  const length = Math.hypot(x2 - x1, y2 - y1);
+  const [ux, uy] = [(x2 - x1) / length, (y2 - y1) / length];
+  const corners = Array.from({ length: 6 }, (_, i) => {
+    const along = (length * (i + 0.5)) / 6;
+    const side = i % 2 === 0 ? 2 : -2;
+    return `L${mm(x1 + ux * along - uy * side)} ${mm(y1 + uy * along + ux * side)}`;
+  });
+  return `M${x1} ${y1}${corners.join('')}L${x2} ${y2}`;
 }
 
 function clampX(x: number, words: string): number {
   const half = (words.length * 2.35 + 2.6) / 2;
-  return Math.max(-33.4 + half, Math.min(33.4 - half, x));
+  return Math.max(-36.4 + half, Math.min(36.4 - half, x));
 }
 
 function flag(x: number, y: number, words: string): Shape[] {
@@ -133,14 +170,53 @@ function jumperShapes({ jumper }: Wiring): Shape[] {
   return [...wire('neutral', 'M-20.8 -2C-19.2 13 -13 20.9 -2 20.9'), ...flag(-10, 28, 'JUMPER')];
 }
 
-const ZIGZAG = 'l1.3 -2.4 2.4 4.8 2.4 -4.8 2.4 4.8 2.4 -4.8 1.3 2.4';
+const BRIDGE_Y = 31.5;
+const LEG_X = -30;
 
-function bridgeShapes({ bridge }: Wiring): Shape[] {
+function bridgeShapes(wiring: Wiring): Shape[] {
+  const { bridge, otherLeg } = wiring;
   if (!bridge) return [];
+  const left = wireAt(wiring, bridge.to);
+  const right = wireAt(wiring, 'H');
   const toGround = bridge.to === 'G';
-  const d = toGround ? `M0 31.5H4${ZIGZAG}H20.4` : `M-20.4 31.5H2.6${ZIGZAG}H20.4`;
-  return [{ kind: 'path', role: 'bridge', d }, ...flag(toGround ? 10.6 : 10, toGround ? 25.8 : 37.8, bridge.word)];
+  const [start, end] = toGround ? [5, 16.6] : [3.4, 15];
+  const line = `M${left} ${BRIDGE_Y}H${start}${resistor([start, BRIDGE_Y], [end, BRIDGE_Y]).replace(/^M[^L]*/, '')}H${right}`;
+  return [
+    { kind: 'path', role: 'bridge', d: line },
+    joined(left),
+    joined(right),
+    ...flag(toGround ? 10.6 : 10, toGround ? 25.8 : 37.8, bridge.word),
+    ...(otherLeg ? otherLegShapes(left) : []),
+  ];
 }
+
+/** The load of the other leg, from its own supply to the neutral that both legs share. */
+function otherLegShapes(neutralX: number): Shape[] {
+  const y = BRIDGE_Y - 6;
+  const zigzag = resistor([LEG_X, y + 3], [LEG_X, y + 14]).replace(/^M[^L]*/, '');
+  return [
+    { kind: 'path', role: 'bridge', d: `M${mm(neutralX - 0.7)} ${y}H${LEG_X}V${y + 3}${zigzag}V${FLOOR}` },
+    { kind: 'circle', role: 'dot', cx: mm(neutralX - 0.7), cy: y, r: 1.1 },
+    { kind: 'path', role: 'jacket', d: `M${LEG_X - 3.5} ${FLOOR}h7v2.6h-7z` },
+    { kind: 'text', role: 'supply', x: LEG_X, y: 53.6, size: 3.1, words: 'LEG 2' },
+  ];
+}
+
+function joined(x: number): Shape {
+  return { kind: 'circle', role: 'dot', cx: x, cy: BRIDGE_Y, r: 1.1 };
+}
+
+/** Where the wire of a screw passes the height of the bridge. */
+function wireAt(wiring: Wiring, screw: Screw): number {
+  const from = wiring.wires[screw];
+  if (!from) return SCREW_AT[screw][0];
+  const path = route(from, screw);
+  const points = Array.from({ length: 101 }, (_, i) => at(path, i / 100));
+  const near = points.reduce((best, point) => (distance(point) < distance(best) ? point : best));
+  return near[0];
+}
+
+const distance = ([, y]: Point) => Math.abs(y - BRIDGE_Y);
 
 function screws(): Shape[] {
   return [

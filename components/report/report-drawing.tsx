@@ -7,7 +7,7 @@ type Drawing = NonNullable<SnapshotFinding['drawing']>;
 
 /** What was read: three lamps or volts on a ring around the face; the device itself where neither was read. */
 export function ReadingDrawing({ drawing, width }: { drawing: Drawing; width: number }) {
-  return <Fitted drawing={readingOf(drawing)} width={width} />;
+  return <Fitted drawing={readingOf(drawing, width)} width={width} />;
 }
 
 /** What that most often means: the conductors behind the face. */
@@ -22,9 +22,9 @@ export function EmptyRing({ width }: { width: number }) {
   return <PdfReceptacle drawing={drawingOf({ view: 'reading', pattern: '5-15R' })} width={width} />;
 }
 
-function readingOf({ pattern, device, lamps, volts }: Drawing) {
+function readingOf({ pattern, device, lamps, volts }: Drawing, width: number) {
   if (!lamps && !volts) return drawingOf({ view: 'face', pattern, device });
-  return drawingOf({ view: 'reading', pattern, ...(lamps ? { lamps } : { volts }) });
+  return drawingOf({ view: 'reading', pattern, device, ...(lamps ? { lamps } : { volts }) }, width);
 }
 
 /** Within a square of that width, whatever its shape. */

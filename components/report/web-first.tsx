@@ -59,5 +59,13 @@ type Drawing = NonNullable<SnapshotFinding['drawing']>;
 export function WebReading({ drawing, size }: { drawing: Drawing; size: number }) {
   const { pattern, device, lamps, volts } = drawing;
   if (!lamps && !volts) return <ReceptacleDrawing view="face" pattern={pattern} device={device} size={size} />;
-  return <ReceptacleDrawing view="reading" pattern={pattern} size={size} {...(lamps ? { lamps } : { volts })} />;
+  return (
+    <ReceptacleDrawing
+      view="reading"
+      pattern={pattern}
+      device={device}
+      size={size}
+      {...(lamps ? { lamps } : { volts })}
+    />
+  );
 }
