@@ -7,6 +7,7 @@ import type {
   PhysicalSign,
   PlaceKind,
   SkipReason,
+  SlotPattern,
   WiringMethod,
 } from '@/lib/findings/vocabulary';
 import type { LampPattern } from '@/lib/findings/facts';
@@ -125,10 +126,11 @@ const LAMP_NAMES: [keyof LampPattern, string][] = [
 
 const LIT: Record<Lamp, string> = { lit: 'lit', dim: 'dim', off: 'off' };
 
-/** "H–N and H–G lit, N–G off". */
-export function lampsInWords(lamps: LampPattern): string {
+/** "H–N and H–G lit, N–G off"; of a two-slot face the one lamp that it has. */
+export function lampsInWords(lamps: LampPattern, pattern?: SlotPattern): string {
+  const names = pattern === '1-15R' ? LAMP_NAMES.slice(0, 1) : LAMP_NAMES;
   const groups = (['lit', 'dim', 'off'] as const).map(
-    (state) => [state, LAMP_NAMES.filter(([key]) => lamps[key] === state)] as const,
+    (state) => [state, names.filter(([key]) => lamps[key] === state)] as const,
   );
   return groups
     .filter(([, names]) => names.length > 0)
@@ -138,4 +140,9 @@ export function lampsInWords(lamps: LampPattern): string {
 
 export function readsCorrect(lamps: LampPattern): boolean {
   return lamps.hn === 'lit' && lamps.hg === 'lit' && lamps.ng === 'off';
+}
+
+/** Nothing that these lamps can show is wrong: a two-slot face has one lamp, and no ground to read. */
+export function showsNoFault(lamps: LampPattern, pattern: SlotPattern): boolean {
+  return pattern === '1-15R' ? lamps.hn === 'lit' : readsCorrect(lamps);
 }

@@ -3,11 +3,11 @@
 import { useState } from 'react';
 import { v7 as uuidv7 } from 'uuid';
 import type { LampPattern } from '@/lib/findings/facts';
-import { SKIP_REASONS, type Lamp, type SkipReason } from '@/lib/findings/vocabulary';
+import { SKIP_REASONS, type Lamp, type SkipReason, type SlotPattern } from '@/lib/findings/vocabulary';
 import type { WalkArea, WalkReceptacle, WalkState } from '@/lib/schemas/walk';
 import type { Draft, Walk } from '@/lib/walk/use-walk';
 import { LampPad, type TappedLamps } from './lamp-pad';
-import { lampsInWords, readsCorrect, SKIP_LABELS } from './labels';
+import { lampsInWords, showsNoFault, SKIP_LABELS } from './labels';
 import { PhotoButton } from './photo-button';
 import { photosOf } from './photos-screen';
 import { receptacleName, receptaclesOf, skipOf, standingReadings } from './progress';
@@ -44,7 +44,8 @@ export function PadScreen({
   const setLamps = (next: TappedLamps) => setTapped({ on: current?.id, lamps: next });
   const inspectionId = state.inspection.id;
   const name = current ? receptacleName(state, current) : `Receptacle ${rows.length + 1}`;
-  const twoSlot = current?.pattern === '1-15R';
+  const slots = current?.pattern ?? '5-15R';
+  const twoSlot = slots === '1-15R';
   const untouched = Object.values(lamps).every((lamp) => lamp === undefined);
 
   async function log(pattern: LampPattern) {
@@ -56,10 +57,10 @@ export function PadScreen({
     navigator.vibrate?.(30);
     setLamps({});
     setLogged({
-      words: `${name}, ${readsCorrect(pattern) ? 'lamps correct' : lampsInWords(pattern)}`,
+      words: `${name}, ${loggedWords(pattern, slots)}`,
       undo: undoOf(readingId, id, drafts),
     });
-    if (readsCorrect(pattern)) goTo(inspectionId, { kind: 'area', areaId: area.id });
+    if (showsNoFault(pattern, slots)) goTo(inspectionId, { kind: 'area', areaId: area.id });
     else goTo(inspectionId, { kind: 'result', receptacleId: id });
   }
 
@@ -102,7 +103,7 @@ export function PadScreen({
               </a>
             )}
           </div>
-          <LampPad pattern={current?.pattern ?? '5-15R'} lamps={lamps} onChange={setLamps} />
+          <LampPad pattern={slots} lamps={lamps} onChange={setLamps} />
         </div>
         <div className="grid gap-2">
           <div className="grid grid-cols-3 gap-2">
@@ -118,10 +119,10 @@ export function PadScreen({
           </div>
           <WalkButton
             weight="log"
-            records={recordsWords(pattern, untouched)}
+            records={recordsWords(untouched ? correctOf(twoSlot) : pattern, slots, untouched)}
             onClick={() => void log(untouched ? correctOf(twoSlot) : pattern)}
           >
-            {untouched ? 'Lamps read correct' : namePattern(pattern)}
+            {namePattern(untouched ? correctOf(twoSlot) : pattern, slots)}
           </WalkButton>
           <div className="grid grid-cols-2 gap-2">
             <TripLink inspectionId={inspectionId} current={current} />
@@ -246,8 +247,9 @@ function wholePattern(lamps: TappedLamps, twoSlot: boolean): LampPattern {
   return { hn: of(lamps.hn), hg: twoSlot ? 'off' : of(lamps.hg), ng: twoSlot ? 'off' : of(lamps.ng) };
 }
 
-function namePattern(lamps: LampPattern): string {
-  if (readsCorrect(lamps)) return 'Lamps read correct';
+function namePattern(lamps: LampPattern, slots: SlotPattern): string {
+  if (slots === '1-15R') return `The lamp is ${lamps.hn}`;
+  if (showsNoFault(lamps, slots)) return 'Lamps read correct';
   const lit = Object.values(lamps).filter((lamp) => lamp === 'lit').length;
   const words = lampsInWords(lamps).split(', ')[0] ?? '';
   if (lit === 1 && !Object.values(lamps).includes('dim')) return `Only ${words.replace(' lit', '')} is lit`;
@@ -255,9 +257,14 @@ function namePattern(lamps: LampPattern): string {
   return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
-function recordsWords(lamps: LampPattern, untouched: boolean): string {
-  if (untouched) return 'H–N and H–G lit, N–G off. Then the next one.';
-  return readsCorrect(lamps) ? 'H–N and H–G lit, N–G off.' : `Records ${lampsInWords(lamps)}. Not a correct pattern.`;
+function recordsWords(lamps: LampPattern, slots: SlotPattern, untouched: boolean): string {
+  const words = lampsInWords(lamps, slots);
+  if (!showsNoFault(lamps, slots)) return `Records ${words}. Not a correct pattern.`;
+  return untouched ? `${words}. Then the next one.` : `${words}.`;
+}
+
+function loggedWords(lamps: LampPattern, slots: SlotPattern): string {
+  return slots !== '1-15R' && showsNoFault(lamps, slots) ? 'lamps correct' : lampsInWords(lamps, slots);
 }
 
 function skippedWords(state: WalkState, current: WalkReceptacle | undefined): string {

@@ -1,5 +1,5 @@
 import type { WalkArea, WalkReading, WalkReceptacle, WalkState } from '@/lib/schemas/walk';
-import { readsCorrect } from './labels';
+import { showsNoFault } from './labels';
 
 export type Bead = 'correct' | 'fault' | 'off' | 'skipped' | 'untested';
 
@@ -51,7 +51,7 @@ export function beadOf(state: WalkState, receptacle: WalkReceptacle, off: Set<st
   const lamps = readings
     .flatMap((row) => (row.kind === 'wiring' && row.evidence.lamps ? [row.evidence.lamps] : []))
     .at(-1);
-  return lamps && readsCorrect(lamps) && !readings.some(showsTrouble) ? 'correct' : 'fault';
+  return lamps && showsNoFault(lamps, receptacle.pattern) && !readings.some(showsTrouble) ? 'correct' : 'fault';
 }
 
 function showsTrouble(reading: WalkReading): boolean {

@@ -40,7 +40,9 @@ export function ResultScreen({
         <div className="grid grid-cols-2 items-end gap-2 text-center text-s">
           <figure>
             <ReceptacleDrawing pattern={receptacle.pattern} view="reading" lamps={evidence.lamps} size={150} />
-            <figcaption>Read: {evidence.lamps ? lampsInWords(evidence.lamps) : 'no lamps'}</figcaption>
+            <figcaption>
+              Read: {evidence.lamps ? lampsInWords(evidence.lamps, receptacle.pattern) : 'no lamps'}
+            </figcaption>
           </figure>
           {leading && (
             <figure>
