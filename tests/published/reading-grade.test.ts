@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { countText, gradeOf, readingGrade } from '@/lib/findings/wording/reading-grade';
+import { countText, gradeOf, readingGrade, syllablesOf, wordsOf } from '@/lib/findings/wording/reading-grade';
 
 const readingEase = (words: number, sentences: number, syllables: number) =>
   206.835 - (1.015 * words) / sentences - (84.6 * syllables) / words;
@@ -36,4 +36,52 @@ test('a decimal point ends no sentence, and a line break does', () => {
 
 test('a text without words has grade zero', () => {
   expect(readingGrade(' … ')).toBe(0);
+});
+
+// Spoken syllables, common practice: one word for each habit of the spelling that a rule must not miscount.
+test.each([
+  ['plates', 1],
+  ['moved', 1],
+  ['needed', 2],
+  ['handled', 2],
+  ['installed', 2],
+  ['tables', 2],
+  ['switches', 2],
+  ['safely', 2],
+  ['basement', 2],
+  ['baseboard', 2],
+  ['appliances', 4],
+  ['electrician', 4],
+  ['immediately', 5],
+  ['situation', 4],
+  ['equipment', 3],
+  ['special', 2],
+  ['radio', 3],
+  ['serious', 3],
+  ['area', 3],
+  ['dryer', 2],
+  ['doing', 2],
+  ['building', 2],
+  ['wire', 1],
+  ['isn’t', 2],
+  ['don’t', 1],
+  ['receptacle', 4],
+])('“%s” has %s syllables', (word, syllables) => {
+  expect(syllablesOf(word)).toBe(syllables);
+});
+
+test('short words in capitals are read letter by letter, and a number digit by digit', () => {
+  expect(syllablesOf('GFCI')).toBe(4);
+  expect(syllablesOf('120')).toBe(4);
+  expect(syllablesOf('119.8')).toBe(4);
+});
+
+test('a hyphen parts two words, an apostrophe and a decimal point none', () => {
+  expect(wordsOf('three-slot outlet’s 119.8 V')).toEqual(['three', 'slot', 'outlet’s', '119.8', 'V']);
+});
+
+test('longer sentences and longer words are graded harder', () => {
+  expect(readingGrade('The ground is not there. Call an electrician.')).toBeLessThan(
+    readingGrade('The ground is not there, and therefore an electrician should be called without undue delay.'),
+  );
 });
