@@ -12,6 +12,10 @@ test('the last adoption before the year of building stands, in whatever order th
   expect(editionInForce({ yearBuilt: 2025, adoptions }).edition).toBe(2014);
 });
 
+test('an adoption on New Year’s Day stood the whole year', () => {
+  expect(editionInForce({ yearBuilt: 2016, adoptions })).toMatchObject({ edition: 2014, range: [2014, 2014] });
+});
+
 test('the words name the day and the source', () => {
   const { says } = editionInForce({ yearBuilt: 2012, adoptions });
   expect(says).toContain('2009-07-01');

@@ -7,7 +7,7 @@ export type Adoption = { edition: number; from: string; source: string };
 
 /**
  * Edition of the model code that most likely stood when a house was built. With adoptions that the firm recorded (edition,
- * `from` as YYYY-MM-DD, source) the last one in force at the end of the year before, if none came in the year itself;
+ * `from` as YYYY-MM-DD, source) the last one in force on 1 January, if none came later in the year;
  * otherwise `edition` is absent. `range` is the oldest and newest edition that can have applied. Never throws. Adoption
  * differs by town and is never assumed (common practice).
  */
@@ -18,9 +18,10 @@ export function editionInForce(p: { yearBuilt: number; adoptions: Adoption[] }):
 } {
   const { yearBuilt } = p;
   const dated = p.adoptions.toSorted((a, b) => (a.from < b.from ? -1 : Number(a.from > b.from)));
-  const before = dated.filter((adoption) => yearOf(adoption) < yearBuilt).at(-1);
-  const during = dated.filter((adoption) => yearOf(adoption) === yearBuilt);
-  const next = dated.find((adoption) => yearOf(adoption) > yearBuilt);
+  // What came on New Year's Day stood the whole year.
+  const before = dated.filter(({ from }) => from <= `${yearBuilt}-01-01`).at(-1);
+  const during = dated.filter(({ from }) => from > `${yearBuilt}-01-01` && from <= `${yearBuilt}-12-31`);
+  const next = dated.find(({ from }) => from > `${yearBuilt}-12-31`);
   if (during.length > 0) return changed(yearBuilt, before, during);
   if (before) return settled(yearBuilt, before);
   return unrecorded(yearBuilt, next);
@@ -28,7 +29,9 @@ export function editionInForce(p: { yearBuilt: number; adoptions: Adoption[] }):
 
 function settled(yearBuilt: number, { edition, from, source }: Adoption): ReturnType<typeof editionInForce> {
   const permit =
-    yearOf({ from }) === yearBuilt - 1 ? ' A permit taken before that day may have stood under the one before.' : '';
+    Number(from.slice(0, 4)) >= yearBuilt - 1
+      ? ' A permit taken before that day may have stood under the one before.'
+      : '';
   return {
     edition,
     range: [edition, edition],
@@ -70,8 +73,4 @@ function usualRange(yearBuilt: number, newest: number): [number, number] {
   const printed = NEC_EDITIONS.filter((edition) => edition <= Math.min(yearBuilt, newest));
   const last = printed.at(-1) ?? NEC_EDITIONS[0];
   return [printed.find((edition) => edition >= yearBuilt - USUAL_LAG_YEARS) ?? last, last];
-}
-
-function yearOf({ from }: Pick<Adoption, 'from'>): number {
-  return Number(from.slice(0, 4));
 }
