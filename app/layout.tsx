@@ -9,7 +9,15 @@ export const metadata: Metadata = {
   description: 'Receptacle, GFCI and AFCI findings for home inspections.',
 };
 
-export const viewport: Viewport = { width: 'device-width', initialScale: 1, viewportFit: 'cover' };
+export const viewport: Viewport = {
+  width: 'device-width',
+  initialScale: 1,
+  viewportFit: 'cover',
+  themeColor: [
+    { media: '(prefers-color-scheme: light)', color: '#f7f3ea' },
+    { media: '(prefers-color-scheme: dark)', color: '#15130f' },
+  ],
+};
 
 export default async function RootLayout({ children }: { children: ReactNode }) {
   // Each page carries the nonce of its own request, so none is made ahead.

@@ -33,7 +33,7 @@ export function readingDrawing(ring: Ring): Drawing {
   const links = face.slots.length === 2 ? KEYS.slice(0, 1) : KEYS;
   const names = terminalNames(face, pattern);
   const states = links.map((key): State => (volts ? 'volts' : (lamps?.[key] ?? 'none')));
-  const level = face.slots.length === 2 || k > 1 ? 0 : -5;
+  const level = face.slots[0]?.y ?? 0;
   const at = markPoints(radius);
   const margin = (pad ? 37 : size < LINES_FROM ? 30.5 : 33) * k;
   const lampRadius = (pad ? 7 : size < LINES_FROM ? 5.6 : 4.6) * k;
@@ -119,7 +119,7 @@ function tapShapes(face: Face, { radius, level, k, names, letters }: Taps): Shap
   const [left, right] = face.slots;
   if (!left || !right) return [];
   const low = face.slots.find((slot) => slot.y > 4);
-  const y = left.y && face.outline === 'round' ? left.y : level;
+  const y = level;
   const x = mm(Math.sqrt(radius ** 2 - y ** 2));
   const r = mm(radius);
   const down = low ? `M0 ${mm(low.y + low.height / 2 + 0.7)}V${r}` : '';

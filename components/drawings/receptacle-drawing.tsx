@@ -55,7 +55,7 @@ function ShapeElement({ shape, line }: { shape: Shape; line: number }) {
   const paint = {
     fill: look.fill ? `var(--${look.fill})` : 'none',
     stroke: look.stroke ? `var(--${look.stroke})` : 'none',
-    strokeWidth: look.stroke ? width : undefined,
+    style: look.stroke ? { strokeWidth: look.mm ? width : `calc(${width}px * var(--thick))` } : undefined,
     strokeDasharray: dash,
     strokeLinecap: look.butt ? ('butt' as const) : ('round' as const),
     strokeLinejoin: 'round' as const,

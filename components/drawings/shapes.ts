@@ -60,7 +60,18 @@ export type Shape =
 export type Drawing = { box: [x: number, y: number, width: number, height: number]; shapes: Shape[]; label: string };
 
 export type Token =
-  'ink' | 'ink-2' | 'paper' | 'paper-2' | 'sheet' | 'rule' | 'brass' | 'silver' | 'green' | 'inverse' | 'on-inverse';
+  | 'ink'
+  | 'ink-2'
+  | 'paper'
+  | 'paper-2'
+  | 'sheet'
+  | 'rule'
+  | 'brass'
+  | 'silver'
+  | 'green'
+  | 'on-metal'
+  | 'inverse'
+  | 'on-inverse';
 /** `line` is a multiple of the drawing's line weight; `mm` is a width in the drawing's own millimetres. Dashes likewise. */
 export type Look = {
   fill?: Token;
@@ -113,7 +124,7 @@ export const LOOKS: Record<Role, Look> = {
   'screw-hot': { fill: 'brass', stroke: 'ink', line: 1 },
   'screw-neutral': { fill: 'silver', stroke: 'ink', line: 1 },
   'screw-ground': { fill: 'green', stroke: 'ink', line: 1 },
-  'screw-slot': { stroke: 'ink', line: 1 },
+  'screw-slot': { stroke: 'on-metal', line: 1 },
   strip: { stroke: 'rule', line: 1, dash: [2, 3] },
   jacket: { fill: 'ink' },
   supply: { fill: 'ink' },

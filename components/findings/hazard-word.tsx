@@ -22,6 +22,7 @@ export function HazardWord({
 }) {
   return (
     <strong
+      data-signal={signal}
       className={`inline-flex items-center gap-2 rounded-[2px] border-2 border-transparent tracking-wider uppercase ${COLOR[signal]} ${small ? 'px-2 py-1 text-xs' : 'px-3 py-1.5 text-m'} leading-none [print-color-adjust:exact]`}
     >
       <svg

@@ -12,6 +12,7 @@ const INK: Record<Token, string> = {
   brass: '#a97d1e',
   silver: '#828a91',
   green: '#2f6b4a',
+  'on-metal': '#1d1a15',
   inverse: '#1d1a15',
   'on-inverse': '#ffffff',
 };
