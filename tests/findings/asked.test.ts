@@ -213,6 +213,27 @@ describe('circuits beyond 15 and 20 A at 120 V', () => {
     }
   });
 
+  test('have no upper limit in a dwelling since then', () => {
+    expect(gfci({ place: 'garage', edition: 2020, ...dry, volts: 240, amps: 100 }).asked).toBe('yes');
+  });
+
+  test('name the interim amendment for electric vehicles', () => {
+    expect(gfci({ place: 'garage', edition: 2017, ...dry, volts: 240 })).toMatchObject({ asked: 'no', rows: ['gf32'] });
+    expect(gfci({ place: 'garage', edition: 2014, ...dry, volts: 240 }).rows).toEqual([]);
+  });
+
+  test('outdoors, hard-wired, are a row of their own from 2020', () => {
+    const unit: Omit<AskedPlace, 'edition'> = {
+      ...dry,
+      place: 'outdoors',
+      volts: 240,
+      amps: 40,
+      dedicatedAppliance: true,
+    };
+    expect(gfci({ ...unit, edition: 2020 }).rows).toContain('gf28');
+    expect(gfci({ ...unit, edition: 2026 }).rows).toContain('gf29');
+  });
+
   test('and named appliances depend from 2023 anywhere, to 60 A', () => {
     const range: AskedPlace = { place: 'closet', edition: 2023, ...dry, volts: 240, amps: 30 };
     expect(gfci(range)).toMatchObject({ asked: 'depends', rows: ['gf31'] });

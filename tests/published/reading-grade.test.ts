@@ -1,5 +1,12 @@
 import { expect, test } from 'vitest';
-import { countText, gradeOf, readingGrade, syllablesOf, wordsOf } from '@/lib/findings/wording/reading-grade';
+import {
+  countText,
+  gradeOf,
+  readingGrade,
+  sentencesOf,
+  syllablesOf,
+  wordsOf,
+} from '@/lib/findings/wording/reading-grade';
 
 const readingEase = (words: number, sentences: number, syllables: number) =>
   206.835 - (1.015 * words) / sentences - (84.6 * syllables) / words;
@@ -32,6 +39,10 @@ test('the cat on the mat is grade −1.45', () => {
 test('a decimal point ends no sentence, and a line break does', () => {
   expect(countText('It read 119.8 volts. Call now.').sentences).toBe(2);
   expect(countText('Stop using it now\nCall an electrician').sentences).toBe(2);
+});
+
+test('a sentence that ends in a quotation mark ends there', () => {
+  expect(sentencesOf('The mark says “No Equipment Ground.” Leave it on! Is it there?')).toHaveLength(3);
 });
 
 test('a text without words has grade zero', () => {

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { maxTripSeconds } from '@/lib/findings/protection/trip-time';
+import { maxTripSeconds } from '@/lib/findings/protection/gfci';
 
 // "UL 943 Class A trip-time curve", T = (20 / I)^1.43, I in mA, from 6 to 264 mA: published [S1] [S2].
 // The values are worked from the formula; they hold within 0.5 %.

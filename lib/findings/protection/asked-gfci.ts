@@ -11,7 +11,7 @@ export function gfciRules(spot: Spot): Ruling[] {
   const { edition, volts = 120, amps = 15 } = spot;
   const isLarge = volts === 240 || amps > 20;
   // Before 2020 the list covered 125 V receptacles of 15 and 20 A alone.
-  if (isLarge && edition < 2020) return [];
+  if (isLarge && edition < 2020) return vehicleRules(spot);
   const rulings = [...placeRules(spot), ...nearWaterRules(spot)];
   const scope = 'Since 2020 the list covers 125 through 250 V of any ampere rating.';
   const widened = isLarge && rulings.some(({ asked }) => asked === 'yes') ? [yes('gf27', scope)] : [];
@@ -21,6 +21,11 @@ export function gfciRules(spot: Spot): Ruling[] {
 function applianceRules({ edition, amps = 15, dedicatedAppliance }: Spot, isLarge: boolean): Ruling[] {
   if (edition < 2023 || amps > APPLIANCE_MAX_AMPS || !(isLarge || dedicatedAppliance)) return [];
   return [depends('gf31', 'If it serves a named appliance such as a range, dryer, microwave or sump pump.')];
+}
+
+function vehicleRules({ edition, place }: Spot): Ruling[] {
+  if (edition < 2017 || (place !== 'garage' && place !== 'outdoors')) return [];
+  return [no('gf32', 'An outlet for an electric vehicle was asked by an interim amendment of 2017.')];
 }
 
 function placeRules(spot: Spot): Ruling[] {
@@ -86,7 +91,8 @@ function outdoorRules({ edition, gradeAccess, heightFt, dedicatedAppliance }: Sp
   if (edition < 1971) return [];
   if (edition >= 1996) {
     if (!dedicatedAppliance) return [yes('gf05', OUTDOOR_HISTORY)];
-    return [depends('gf05', 'A dedicated de-icing outlet that is not readily reached is excepted.')];
+    const deIcing = depends('gf05', 'A dedicated de-icing outlet that is not readily reached is excepted.');
+    return [deIcing, ...hardWiredRules(edition)];
   }
   if (edition < 1978) return [yes('gf03', OUTDOOR_HISTORY)];
   if (gradeAccess === false) return [no('gf04', OUTDOOR_HISTORY)];
@@ -94,6 +100,13 @@ function outdoorRules({ edition, gradeAccess, heightFt, dedicatedAppliance }: Sp
   if (edition < 1987) return [yes('gf04', OUTDOOR_HISTORY)];
   const reached = within(heightFt, GRADE_REACH_FT);
   return [{ asked: reached, row: 'gf04', note: OUTDOOR_HISTORY }];
+}
+
+function hardWiredRules(edition: number): Ruling[] {
+  if (edition < 2020) return [];
+  return edition >= 2026
+    ? [depends('gf29', 'Hard-wired equipment counts to 60 A; listed air conditioning is excepted to 1 September 2026.')]
+    : [depends('gf28', 'Hard-wired equipment counts to 50 A; several states delayed or deleted that.')];
 }
 
 /** A pool is outdoors, or in a damp place indoors, or neither; nobody said which. */

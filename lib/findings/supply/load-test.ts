@@ -1,8 +1,8 @@
 import type { LoadTest } from '../facts';
 import type { YesNoUnknown } from '../vocabulary';
 
-export type LoadBand = 'good' | 'above-3' | 'above-5' | 'above-8';
-export type GroundAnswer = 'not-assessed' | 'suspected' | 'undecided' | 'no-joint-here' | 'neutral-doubtful';
+type LoadBand = 'good' | 'above-3' | 'above-5' | 'above-8';
+type GroundAnswer = 'not-assessed' | 'suspected' | 'undecided' | 'no-joint-here' | 'neutral-doubtful';
 export type LoadAssessment = {
   dropVolts: number;
   dropPercent: number;
