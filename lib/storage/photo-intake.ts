@@ -58,7 +58,8 @@ export async function takeInPhoto(path: string): Promise<IntakeOutcome> {
 }
 
 async function refusalOf(path: string): Promise<string | undefined> {
-  const metadata = await sharp(path, { limitInputPixels: MOST_PIXELS })
+  // Reads the head of the file only, so that the size can be told before anything unfolds.
+  const metadata = await sharp(path, { limitInputPixels: false })
     .metadata()
     .catch(() => null);
   if (!metadata?.format || !(metadata.format in FORMATS))
