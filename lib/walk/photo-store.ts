@@ -1,13 +1,19 @@
 import type { PhonePhoto, PhoneStore } from './phone-store';
 
-/** Sends photos whose announcement the server has counted; each stays on the phone until the server says it has it. */
-export async function sendPhotos(store: PhoneStore, userId: string): Promise<void> {
+/**
+ * Sends photos whose announcement the server has counted; each stays on the phone until the server says it has it.
+ * True where the server answered for any of them.
+ */
+export async function sendPhotos(store: PhoneStore, userId: string): Promise<boolean> {
   const waiting = await store.photos.where('[userId+state]').anyOf([userId, 'waiting'], [userId, 'sending']).toArray();
+  let answered = false;
   for (const photo of waiting) {
     if (!(await isAnnounced(store, userId, photo.id))) continue;
     const outcome = await sendPhoto(store, photo);
-    if (outcome === 'unreachable') return;
+    if (outcome === 'unreachable') return answered;
+    answered = true;
   }
+  return answered;
 }
 
 async function isAnnounced(store: PhoneStore, userId: string, photoId: string): Promise<boolean> {

@@ -74,6 +74,18 @@ function post(fetcher: typeof fetch, path: string, body: unknown): Promise<Respo
 }
 
 /** One sender per origin, however many tabs are open. Another tab that is sending makes this one wait. */
-export function asOneSender<Result>(work: () => Promise<Result>): Promise<Result> {
+function asOneSender<Result>(work: () => Promise<Result>): Promise<Result> {
   return navigator.locks.request('ohmstead-sender', work) as Promise<Result>;
+}
+
+/** Calls that come while one waits for its turn share that one, which takes along what they saved. */
+export function sharingTurns<Result>(work: () => Promise<Result>): () => Promise<Result> {
+  let waiting: Promise<Result> | undefined;
+  return () => {
+    waiting ??= asOneSender(() => {
+      waiting = undefined;
+      return work();
+    });
+    return waiting;
+  };
 }

@@ -14,7 +14,7 @@ import {
   type ServedInspection,
 } from './phone-store';
 import { sendPhotos } from './photo-store';
-import { asOneSender, pull, sendPending } from './send';
+import { pull, sendPending, sharingTurns } from './send';
 
 const EVERY_MS = 30_000;
 
@@ -55,12 +55,16 @@ export function useWalk(inspectionId: string | null): Walk {
   usePerson(setPerson, setLink);
   const { served, outbox, photos } = useHeld(userId, inspectionId);
 
+  const inTurn = useMemo(
+    () => (userId && inspectionId ? sharingTurns(() => exchange(userId, inspectionId)) : null),
+    [userId, inspectionId],
+  );
   const refresh = useCallback(async () => {
-    if (!userId || !inspectionId) return;
-    const reached = await asOneSender(() => exchange(userId, inspectionId));
+    if (!inTurn) return;
+    const reached = await inTurn();
     setLink(reached.link);
     setMissing(reached.missing);
-  }, [userId, inspectionId]);
+  }, [inTurn]);
   useTriggers(refresh);
 
   const save = useCallback(
@@ -95,8 +99,7 @@ async function exchange(userId: string, inspectionId: string): Promise<{ link: L
   if (pulled.kind === 'signed-out') return { link: 'signed-out', missing: false };
   if (pulled.kind === 'not-found') return { link: 'connected', missing: true };
   if (pulled.kind === 'unreachable' || sent.kind === 'unreachable') return { link: 'no-signal', missing: false };
-  await sendPhotos(store, userId);
-  await pull(store, userId, inspectionId);
+  if (await sendPhotos(store, userId)) await pull(store, userId, inspectionId);
   return { link: 'connected', missing: false };
 }
 
