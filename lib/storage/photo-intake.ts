@@ -2,7 +2,7 @@ import 'server-only';
 
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import sharp from 'sharp';
+import sharp, { type Metadata, type Sharp } from 'sharp';
 
 const MOST_PIXELS = 50_000_000;
 const FORMATS: Record<string, string> = { jpeg: 'image/jpeg', png: 'image/png', webp: 'image/webp' };
@@ -29,41 +29,39 @@ export type IntakeOutcome = TakenIn | { kind: 'refused'; says: string };
 
 /** Reads a picture by its content, turns it upright, and makes the two copies that may be shared: no place, no serial number. */
 export async function takeInPhoto(path: string): Promise<IntakeOutcome> {
-  const refusal = await refusalOf(path);
-  if (refusal) return { kind: 'refused', says: refusal };
+  const source = sharp(path, { limitInputPixels: MOST_PIXELS, failOn: 'error', animated: false });
+  const metadata = await source.metadata().catch(() => null);
+  const refusal = refusalOf(metadata);
+  if (refusal || !metadata) return { kind: 'refused', says: refusal ?? NOT_A_PICTURE };
   try {
-    const source = sharp(path, { limitInputPixels: MOST_PIXELS, failOn: 'error', animated: false });
-    const { format } = await source.metadata();
-    const upright = source.autoOrient().flatten({ background: '#ffffff' }).toColorspace('srgb');
-    const wide = await upright
-      .resize(WIDE, WIDE, { fit: 'inside', withoutEnlargement: true })
-      .jpeg(JPEG)
-      .toBuffer({ resolveWithObject: true });
-    const small = await sharp(wide.data)
-      .resize(SMALL, SMALL, { fit: 'inside', withoutEnlargement: true })
-      .jpeg(JPEG)
-      .toBuffer();
-    return {
-      kind: 'taken-in',
-      type: FORMATS[format ?? ''] ?? 'image/jpeg',
-      sha256: await sha256OfFile(path),
-      width: wide.info.width,
-      height: wide.info.height,
-      wide: wide.data,
-      small,
-    };
+    const [copies, sha256] = await Promise.all([makeCopies(source), sha256OfFile(path)]);
+    return { kind: 'taken-in', type: FORMATS[metadata.format ?? ''] ?? 'image/jpeg', sha256, ...copies };
   } catch {
     return { kind: 'refused', says: 'This picture is damaged or not complete. Take it again.' };
   }
 }
 
-async function refusalOf(path: string): Promise<string | undefined> {
-  // Reads the head of the file only, so that the size can be told before anything unfolds.
-  const metadata = await sharp(path, { limitInputPixels: false })
-    .metadata()
-    .catch(() => null);
-  if (!metadata?.format || !(metadata.format in FORMATS))
-    return 'This file is not a JPEG, PNG or WebP picture. Take it again with the camera, or save it as JPEG.';
+/** The large picture is decoded once; both copies are written from its 1600 px pixels. */
+async function makeCopies(source: Sharp): Promise<Pick<TakenIn, 'width' | 'height' | 'wide' | 'small'>> {
+  const { data, info } = await source
+    .autoOrient()
+    .flatten({ background: '#ffffff' })
+    .toColorspace('srgb')
+    .resize(WIDE, WIDE, { fit: 'inside', withoutEnlargement: true })
+    .raw()
+    .toBuffer({ resolveWithObject: true });
+  const { width, height, channels } = info;
+  const pixels = () => sharp(data, { raw: { width, height, channels } });
+  const wide = await pixels().jpeg(JPEG).toBuffer();
+  const small = await pixels().resize(SMALL, SMALL, { fit: 'inside', withoutEnlargement: true }).jpeg(JPEG).toBuffer();
+  return { width, height, wide, small };
+}
+
+const NOT_A_PICTURE =
+  'This file is not a JPEG, PNG or WebP picture. Take it again with the camera, or save it as JPEG.';
+
+function refusalOf(metadata: Metadata | null): string | undefined {
+  if (!metadata?.format || !(metadata.format in FORMATS)) return NOT_A_PICTURE;
   if ((metadata.pages ?? 1) > 1) return 'Moving pictures cannot be used. Take a still photo.';
   if (metadata.width * metadata.height > MOST_PIXELS)
     return 'This picture has over 50 million pixels. Choose a smaller size in the camera settings.';
