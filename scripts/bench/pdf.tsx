@@ -1,4 +1,4 @@
-import { Document, Image, Page, renderToBuffer, Text, View } from '@react-pdf/renderer';
+import { Document, Image as PdfImage, Page, renderToBuffer, Text, View } from '@react-pdf/renderer';
 import PDFKit from 'pdfkit';
 import { getDocumentProxy } from 'unpdf';
 import { fontFile } from '@/components/report/report-fonts';
@@ -62,7 +62,7 @@ function bareReactPdf(plain: Plain): Promise<Buffer> {
           ))}
           <View style={{ flexDirection: 'row' }}>
             {photos.map((data, index) => (
-              <Image key={index} src={{ data, format: 'jpg' }} style={{ ...PHOTO, objectFit: 'contain' }} />
+              <PdfImage key={index} src={{ data, format: 'jpg' }} style={{ ...PHOTO, objectFit: 'contain' }} />
             ))}
           </View>
         </Page>
