@@ -87,10 +87,34 @@ describe('an exception of its time', () => {
   });
 
   test('spares an outbuilding whose floor is not at grade, until 2026', () => {
-    const shed: AskedPlace = { ...dry, place: 'accessory-building', edition: 2023, finished: false };
-    expect(gfci({ ...shed, gradeAccess: false }).asked).toBe('no');
+    const shed: AskedPlace = { ...dry, place: 'accessory-building', edition: 2017, finished: false };
+    expect(gfci({ ...shed, gradeAccess: false })).toMatchObject({ asked: 'no', rows: ['gf09'] });
     expect(gfci(shed).asked).toBe('depends');
     expect(gfci({ ...shed, gradeAccess: false, edition: 2026 }).asked).toBe('yes');
+  });
+});
+
+describe('an exposure that nobody told', () => {
+  const told = { ...dry, finished: false, gradeAccess: false };
+
+  test.each([
+    ['a sunroom that may be damp', { place: 'sunroom' }, 2017, 2020, 'gf26'],
+    ['an outbuilding that may be damp', { place: 'accessory-building' }, 2017, 2020, 'gf26'],
+    ['an attic with equipment to be serviced', { place: 'attic' }, 2017, 2020, 'gf40'],
+    ['a sink of some kind farther off', { place: 'dining-room', sinkFt: 9 }, 2020, 2023, 'gf30'],
+  ] as [string, Omit<AskedPlace, 'edition'>, number, number, string][])('depends: %s', (_, point, last, first, row) => {
+    expect(gfci({ ...told, ...point, edition: last }).asked).toBe('no');
+    expect(gfci({ ...told, ...point, edition: first })).toMatchObject({ asked: 'depends', rows: [row], since: first });
+  });
+
+  test('is no matter for a sink at which no food is made', () => {
+    const near: AskedPlace = { ...told, place: 'dining-room', edition: 2023, sinkFt: 9 };
+    for (const sinkKind of ['laundry', 'utility', 'other'] as const)
+      expect(gfci({ ...near, sinkKind }).asked).toBe('no');
+  });
+
+  test('of a service outlet is from memory, and no surer than that', () => {
+    expect(gfci({ ...told, place: 'attic', edition: 2020 }).confidence).toBe('low');
   });
 });
 

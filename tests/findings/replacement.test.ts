@@ -43,6 +43,12 @@ describe('without a ground', () => {
     expect(choiceOf(FED, bedroom).marks).toContain('TR');
   });
 
+  test('outdoors a two-slot receptacle again stands up to weather from 2011', () => {
+    const outdoors = { groundPresent: false, place: 'outdoors', edition: 2011 } as const;
+    expect(choiceOf(TWO_SLOT, outdoors).marks).toEqual(['WR']);
+    expect(choiceOf(TWO_SLOT, { ...outdoors, edition: 2008 }).marks).toEqual([]);
+  });
+
   test('before 1984 there was no GFCI in place of a ground', () => {
     expect(sections({ ...bedroom, edition: 1981 })).toEqual(['250.130(C)', TWO_SLOT]);
     expect(sections({ ...bedroom, edition: 1984 })).toContain(OWN_GFCI);

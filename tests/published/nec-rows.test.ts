@@ -158,11 +158,15 @@ test('a pool area indoors may be damp, which counts from 2020', () => {
 
 test('outdoors was narrowed from 1978 to 1996 and was never narrowed again', () => {
   // Access from grade from 1978, medium [S27d]; the height of 6 ft 6 in as worded in 1987; all outlets from 1996 [S27a, S27d].
-  const high = (edition: number) =>
-    protectionAsked({ ...dry, place: 'outdoors', gradeAccess: true, heightFt: 8, edition }).gfci.asked;
+  const at = (heightFt: number) => (edition: number) =>
+    protectionAsked({ ...dry, place: 'outdoors', gradeAccess: true, heightFt, edition }).gfci.asked;
+  const high = at(6.6);
+  const low = at(6.5);
   const upstairs = (edition: number) =>
     protectionAsked({ ...dry, place: 'outdoors', gradeAccess: false, edition }).gfci.asked;
-  expect([1975, 1978, 1987, 1993, 1996].map(high)).toEqual(['yes', 'yes', 'no', 'no', 'yes']);
+  // Histories put the height at 1978, 1981 and 1987.
+  expect([1975, 1978, 1984, 1987, 1993, 1996].map(high)).toEqual(['yes', 'depends', 'depends', 'no', 'no', 'yes']);
+  expect([1975, 1978, 1984, 1987, 1993, 1996].map(low)).toEqual(['yes', 'yes', 'yes', 'yes', 'yes', 'yes']);
   expect([1975, 1978, 1987, 1993, 1996].map(upstairs)).toEqual(['yes', 'no', 'no', 'no', 'yes']);
 });
 

@@ -61,8 +61,10 @@ function placeRules(spot: Spot): Ruling[] {
       return poolAreaRules(spot);
     case 'attic':
       return edition >= 2020
-        ? [no('gf40', 'A service receptacle for heating or cooling equipment is another matter, from memory.')]
+        ? [depends('gf40', 'A receptacle within 25 ft of heating or cooling equipment, for its service; from memory.')]
         : [];
+    case 'sunroom':
+      return dampRules(spot);
     case 'bedroom':
     case 'living-room':
     case 'dining-room':
@@ -71,7 +73,6 @@ function placeRules(spot: Spot): Ruling[] {
     case 'office':
     case 'hallway':
     case 'closet':
-    case 'sunroom':
     case 'other-room':
       return [];
   }
@@ -97,8 +98,9 @@ function outdoorRules({ edition, gradeAccess, heightFt, dedicatedAppliance }: Sp
   if (edition < 1978) return [yes('gf03', OUTDOOR_HISTORY)];
   if (gradeAccess === false) return [no('gf04', OUTDOOR_HISTORY)];
   if (gradeAccess === undefined) return [depends('gf04', OUTDOOR_HISTORY)];
-  if (edition < 1987) return [yes('gf04', OUTDOOR_HISTORY)];
   const reached = within(heightFt, GRADE_REACH_FT);
+  // Histories differ on the years before 1987: a height was perhaps part of it from 1978 on.
+  if (edition < 1987) return [reached === 'no' ? depends('gf04', OUTDOOR_HISTORY) : yes('gf04', OUTDOOR_HISTORY)];
   return [{ asked: reached, row: 'gf04', note: OUTDOOR_HISTORY }];
 }
 
@@ -110,14 +112,19 @@ function hardWiredRules(edition: number): Ruling[] {
 }
 
 /** A pool is outdoors, or in a damp place indoors, or neither; nobody said which. */
-function poolAreaRules({ edition }: Spot): Ruling[] {
+function poolAreaRules(spot: Spot): Ruling[] {
+  const { edition } = spot;
   const note =
     'If this pool area is outdoors, the outdoor rule counts too. Spas and hydromassage tubs have rows of their own.';
   if (edition < 1971) return [];
   if (edition < 1978) return [depends('gf03', note)];
   if (edition < 1996) return [depends('gf04', note)];
-  const damp = depends('gf26', 'Damp and wet places indoors count since 2020.');
-  return edition >= 2020 ? [depends('gf05', note), damp] : [depends('gf05', note)];
+  return [depends('gf05', note), ...dampRules(spot)];
+}
+
+/** Whether a place that may be damp is so, nobody said. */
+function dampRules({ edition }: Spot): Ruling[] {
+  return edition >= 2020 ? [depends('gf26', 'Damp and wet places indoors count since 2020.')] : [];
 }
 
 function garageRules({ edition, dedicatedAppliance, heightFt }: Spot): Ruling[] {
@@ -128,12 +135,13 @@ function garageRules({ edition, dedicatedAppliance, heightFt }: Spot): Ruling[] 
   return [yes('gf07', note)];
 }
 
-function accessoryRules({ edition, gradeAccess, finished }: Spot): Ruling[] {
+function accessoryRules(spot: Spot): Ruling[] {
+  const { edition, gradeAccess, finished } = spot;
   if (edition < 1996) return [];
   if (edition >= 2026)
     return finished === false ? [yes('gf09')] : [depends('gf09', 'For buildings that are not habitable.')];
   const note = 'For buildings that are not habitable, with a floor at or below grade.';
-  if (gradeAccess === false) return [no('gf09', note)];
+  if (gradeAccess === false) return [no('gf09', note), ...dampRules(spot)];
   return gradeAccess && finished === false ? [yes('gf09', note)] : [depends('gf09', note)];
 }
 

@@ -44,8 +44,8 @@ function kindOfSink({ place, sinkKind }: Spot): SinkKind | undefined {
 function foodRules({ edition, place, sinkFt, sinkKind }: Spot): Ruling[] {
   if (edition < 2023) return [];
   if (place === 'wet-bar') return [yes('gf30')];
-  const hasFoodSink = sinkFt !== 'none' && sinkKind !== undefined && FOOD_SINKS.includes(sinkKind);
-  return hasFoodSink && place !== 'kitchen-counter' && place !== 'kitchen-wall'
+  const mayServeFood = sinkFt !== 'none' && (sinkKind === undefined || FOOD_SINKS.includes(sinkKind));
+  return mayServeFood && place !== 'kitchen-counter' && place !== 'kitchen-wall'
     ? [depends('gf30', 'In an area with a sink and a fixed place for food or drink it is asked at any distance.')]
     : [];
 }

@@ -37,7 +37,8 @@ export function replacementChoices(p: Replaced): ReplacementChoice[] {
         marks,
         section: '250.130(C)',
       };
-  return p.groundPresent ? [grounded] : [grounded, twoSlot(duty, words), ...withGfci(p.edition, words, marks)];
+  if (p.groundPresent) return [grounded];
+  return [grounded, twoSlot(duty, words, marks), ...withGfci(p.edition, words, marks)];
 }
 
 function protection(duty: Asked['asked']): string {
@@ -46,13 +47,17 @@ function protection(duty: Asked['asked']): string {
 }
 
 /** TR is not asked of a two-slot receptacle that replaces one. */
-function twoSlot(duty: Asked['asked'], words: string): ReplacementChoice {
+function twoSlot(duty: Asked['asked'], words: string, marks: string[]): ReplacementChoice {
   const condition = {
     yes: ', only with GFCI protection ahead of it',
     depends: ', and where the place asks for it only with GFCI protection ahead of it',
     no: '',
   }[duty];
-  return { choice: `A two-slot receptacle again${condition}${words}`, marks: [], section: '406.4(D)(2)(a)' };
+  return {
+    choice: `A two-slot receptacle again${condition}${words}`,
+    marks: marks.filter((mark) => mark !== TAMPER_RESISTANT),
+    section: '406.4(D)(2)(a)',
+  };
 }
 
 function withGfci(edition: number, words: string, marks: string[]): ReplacementChoice[] {
