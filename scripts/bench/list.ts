@@ -43,7 +43,7 @@ export async function listRows({ small, large }: BenchFirms): Promise<Measured[]
     ['an inspector’s own', plain({}), ({ inspectors, owner }) => inspectors[3] ?? owner],
   ];
   const measured: Measured[] = [];
-  for (const [what, filterOf, who = ({ owner }) => owner] of rows) {
+  for (const [what, filterOf, who = ({ owner }: BenchFirm) => owner] of rows) {
     const [few, many] = [await filterOf(small), await filterOf(large)];
     const { floorMs, productMs, ratio } = await compare(
       ROUNDS,
