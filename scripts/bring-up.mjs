@@ -83,14 +83,22 @@ async function startFakes(stack, root, settings, given, ports) {
       cwd: root,
       env: settings,
     });
+  const taken = new Set();
+  // None of them listens yet, so two could be given the same free port.
+  const ownPort = async (usual) => {
+    let port = await freePort(usual);
+    while (taken.has(port)) port = await freePort(port + 1);
+    taken.add(port);
+    return port;
+  };
   if (!given.SMTP_URL) {
-    const [smtp, pages] = [await freePort(ports.smtp), await freePort(ports.mail)];
+    const [smtp, pages] = [await ownPort(ports.smtp), await ownPort(ports.mail)];
     settings.SMTP_URL = `smtp://127.0.0.1:${smtp}`;
     settings.MAIL_SINK_URL = `http://127.0.0.1:${pages}`;
     fake('mail-sink', smtp, pages, path.join(stack.home, 'mail'));
   }
   if (!given.STRIPE_SECRET_KEY) {
-    const port = await freePort(ports.payments);
+    const port = await ownPort(ports.payments);
     settings.STRIPE_SECRET_KEY = 'sk_test_fake';
     settings.STRIPE_WEBHOOK_SECRET = stack.cluster.secrets.webhookSecret;
     settings.STRIPE_API_BASE = `http://127.0.0.1:${port}`;
