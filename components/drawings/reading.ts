@@ -51,7 +51,7 @@ export function readingDrawing(ring: Ring): Drawing {
       return lamp(x, y, {
         r: lampRadius,
         state: states[i] ?? 'none',
-        tag: pad ? names.pairs[i] : undefined,
+        tag: pad || size >= LETTERS_FROM ? names.pairs[i] : undefined,
         pad,
         size,
       });
@@ -161,8 +161,18 @@ function lamp(x: number, y: number, { r, state, tag, pad, size }: LampMark): Sha
     const cross = `M${mm(x - d)} ${mm(y - d)}L${mm(x + d)} ${mm(y + d)}M${mm(x + d)} ${mm(y - d)}L${mm(x - d)} ${mm(y + d)}`;
     shapes.push({ kind: 'path', role: state === 'lit' ? 'cross-lit' : 'cross', d: cross });
   }
-  if (state === 'none' && tag)
-    shapes.push({ kind: 'text', role: 'tag', x: mm(x), y: mm(y + 1.35), size: 3.7, words: tag });
+  if (state === 'none' && tag) {
+    const words = pad ? tag : tag.replace('–', '');
+    const letters = mm(r * (pad ? 0.53 : 0.8));
+    shapes.push({
+      kind: 'text',
+      role: pad ? 'tag' : 'letter',
+      x: mm(x),
+      y: mm(y + letters * 0.36),
+      size: letters,
+      words,
+    });
+  }
   return shapes;
 }
 
