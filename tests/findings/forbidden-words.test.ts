@@ -22,6 +22,14 @@ test.each([
   ['Outlet 3: OK', 'OK'],
   ['Everything is okay.', 'okay'],
   ['PASSED', 'PASSED'],
+  ['An up-to-code kitchen.', 'up-to-code'],
+  ['The wiring meets code.', 'meets code'],
+  ['It met the code of its day.', 'met the code'],
+  ['A grandfather clause covers it.', 'grandfather clause'],
+  ['This circuit will pass inspection.', 'pass inspection'],
+  ['The house fails an inspection.', 'fails an inspection'],
+  ['It is properly wired.', 'properly wired'],
+  ['It complies with the code.', 'complies with the code'],
 ])('“%s” holds “%s”', (text, word) => {
   expect(words(text)).toEqual([word]);
 });
@@ -36,6 +44,10 @@ test.each([
   'Okra grows beside the outlet.',
   'Read the access code to the gate.',
   'The device failed to trip.',
+  'The tester’s current passes to ground.',
+  'Cut power with the fail-safe switch.',
+  'It is never safe to touch.',
+  'The grandfather clock hides an outlet.',
   'Edition years are those of the national model code.',
 ])('“%s” may be printed', (text) => {
   expect(words(text)).toEqual([]);
@@ -60,11 +72,28 @@ test.each([
   ['La toma fue aprobada.', 'aprobada'],
   ['Está correctamente conectada.', 'correctamente conectada'],
   ['La toma es segura.', 'es segura'],
+  ['Es una infracción.', 'infracción'],
+  ['La conexión infringe la norma.', 'infringe'],
+  ['Es ilícito.', 'ilícito'],
+  ['La cocina incumple el código.', 'incumple el código'],
+  ['La casa falló la inspección.', 'falló la inspección'],
+  ['Está debidamente conectada a tierra.', 'debidamente conectada'],
+  ['Fue puesta a tierra correctamente.', 'puesta a tierra correctamente'],
+  ['Toma 3: OK', 'OK'],
 ])('in Spanish “%s” holds “%s”', (text, word) => {
   expect(words(text, 'es')).toEqual([word]);
 });
 
 test('each language has its own words', () => {
   expect(words('It passed.', 'es')).toEqual([]);
-  expect(words('La toma no es segura.', 'es')).toEqual([]);
+});
+
+test.each([
+  'La toma no es segura.',
+  'Nunca es segura si el piso está mojado.',
+  'No está conectada a tierra.',
+  'El seguro de la casa.',
+  'El código de la puerta.',
+])('in Spanish “%s” may be printed', (text) => {
+  expect(words(text, 'es')).toEqual([]);
 });
