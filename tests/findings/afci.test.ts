@@ -11,6 +11,7 @@ const TABLE: [row: string, verdict: string, protects: string, trial: AfciTrial][
   ['A0', 'incomplete', 'unproven', { button: 'trips', resets: true }],
   ['A1', 'works', 'yes', works],
   ['A1', 'works', 'yes', { ...works, indicator: 'no-trip' }],
+  ['A1', 'works', 'yes', { ...works, indicator: 'trips' }],
   ['A2', 'failed', 'no', { button: 'no-trip' }],
   ['A2', 'failed', 'no', { button: 'no-trip', indicator: 'trips' }],
   ['A3', 'no-reset', 'unproven', { ...works, resets: false }],

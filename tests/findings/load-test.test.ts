@@ -2,43 +2,6 @@ import { describe, expect, test } from 'vitest';
 import type { LoadTest } from '@/lib/findings/facts';
 import { assessLoadTest } from '@/lib/findings/supply/load-test';
 
-// Worked tests of facts section 4, derived: R = (Vnl − Vl)/I, % = 100(Vnl − Vl)/Vnl, fault current = Vnl/R.
-test.each([
-  {
-    noLoadHn: 121.4,
-    loadedHn: 117.2,
-    amps: 12,
-    drop: 4.2,
-    percent: 3.46,
-    ohms: 0.35,
-    fault: 346.9,
-    at15: 4.32,
-    at20: 5.77,
-  },
-  { noLoadHn: 120, loadedHn: 116.4, amps: 15, drop: 3.6, percent: 3.0, ohms: 0.24, fault: 500, at15: 3.0, at20: 4.0 },
-  { noLoadHn: 120, loadedHn: 114, amps: 15, drop: 6, percent: 5.0, ohms: 0.4, fault: 300, at15: 5.0, at20: 6.67 },
-  {
-    noLoadHn: 122,
-    loadedHn: 108,
-    amps: 12,
-    drop: 14,
-    percent: 11.48,
-    ohms: 1.167,
-    fault: 104.6,
-    at15: 14.35,
-    at20: 19.13,
-  },
-])('$noLoadHn V to $loadedHn V at $amps A is $percent % and $ohms ohms', (worked) => {
-  const found = assessLoadTest(worked);
-  expect(found.dropVolts).toBeCloseTo(worked.drop, 2);
-  expect(found.dropPercent).toBeCloseTo(worked.percent, 2);
-  expect(found.loopOhms).toBeCloseTo(worked.ohms, 3);
-  expect(found.faultAmps).toBeCloseTo(worked.fault, 1);
-  // The table's last two columns were computed from rounded values; they hold within 0.01.
-  expect(Math.abs(found.percentAt15 - worked.at15)).toBeLessThan(0.01);
-  expect(Math.abs(found.percentAt20 - worked.at20)).toBeLessThan(0.01);
-});
-
 describe('the band of a drop', () => {
   test.each([
     [120, 'good'],
@@ -71,9 +34,6 @@ const loaded = (noLoadNg: number, loadedNg: number): LoadTest => ({
 
 describe('whether neutral and ground are joined at the receptacle', () => {
   test.each([
-    [0.05, 2.1, 'no-joint-here', 'worked example: half of the drop'],
-    [0.02, 0.02, 'suspected', 'worked example: neutral to ground does not move'],
-    [0.05, 0.6, 'undecided', 'worked example: a small share'],
     [0.1, 0.22, 'suspected', 'at 0.1 V plus 0.01 ohms times the load'],
     [0.1, 0.23, 'undecided', 'just above it'],
     [0.11, 0.11, 'undecided', 'not quiet without load'],
