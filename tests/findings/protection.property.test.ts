@@ -173,6 +173,38 @@ describe('what an edition asks, whatever is known of the point', () => {
     );
   });
 
+  test('is never “no” for want of the kind of a sink, but in a kitchen, whose sink is taken for its own', () => {
+    fc.assert(
+      fc.property(askedPlace, (p) => {
+        fc.pre(p.place !== 'kitchen-wall' && p.place !== 'dishwasher');
+        if (protectionAsked(p).gfci.asked === 'no') return;
+        expect(protectionAsked({ ...p, sinkKind: undefined }).gfci.asked).not.toBe('no');
+      }),
+      RUNS,
+    );
+  });
+
+  test('is decided by a sink that was measured to the other edge only where a rim of up to a foot changes nothing', () => {
+    const foot = fc.double({ min: 0, max: 1, noNaN: true });
+    const far = fc.double({ min: 1, max: 9, noNaN: true });
+    const edition = fc.constantFrom(...NEC_EDITIONS.filter((printed) => printed >= 2005 && printed < 2023));
+    fc.assert(
+      fc.property(edition, far, foot, (printed, sinkFt, rim) => {
+        const isNew = printed >= 2017;
+        const point = { place: 'bedroom', sinkKind: 'laundry', tubOrShowerFt: 'none', edition: printed } as const;
+        const [other, right] = isNew
+          ? (['outside-edge', 'inside-bowl-edge'] as const)
+          : (['inside-bowl-edge', 'outside-edge'] as const);
+        const truly = (width: number) =>
+          protectionAsked({ ...point, sinkFt: isNew ? sinkFt + width : sinkFt - width, measuredTo: right }).gfci.asked;
+        const { asked } = protectionAsked({ ...point, sinkFt, measuredTo: other }).gfci;
+        if (asked === 'depends') expect(truly(0)).not.toBe(truly(1));
+        else expect(truly(rim)).toBe(asked);
+      }),
+      RUNS,
+    );
+  });
+
   test('is never “no” for want of the distance to a pool beside it', () => {
     for (const place of ['pool-area', 'outdoors', 'sunroom', 'accessory-building', 'boathouse'] as const)
       for (const edition of NEC_EDITIONS.filter((printed) => printed >= 1971))

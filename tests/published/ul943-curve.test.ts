@@ -29,6 +29,10 @@ test('at 20 mA the limit is one second exactly', () => {
   expect(maxTripSeconds(20)).toBe(1);
 });
 
+test('at 264 mA the formula still holds, a hair below the 25 ms that follow', () => {
+  expect(maxTripSeconds(264)).toBeCloseTo(0.02498, 5);
+});
+
 test('nothing obliges a device to open below 6 mA', () => {
   // Must trip at 6 mA or more, must not below 4 mA: UL 943, published [S1] [S3]. Between them both conform.
   for (const milliamps of [0, 3.9, 4, 5, 5.99]) expect(maxTripSeconds(milliamps)).toBeNull();
