@@ -14,7 +14,7 @@ export async function firstLoadRow(): Promise<Measured> {
   };
 }
 
-/** Every script that the page names, in a tag or in what it hands to React; but for old browsers only. */
+/** Every script that the page names, in a tag or in what it hands to React: a browser was seen to fetch just these. */
 async function scriptBytes(path: string): Promise<number> {
   const html = await text(path);
   const modern = html.replace(/<script[^>]*nomodule[^>]*>/gi, '');

@@ -3,7 +3,7 @@ import PDFKit from 'pdfkit';
 import { getDocumentProxy } from 'unpdf';
 import { fontFile } from '@/components/report/report-fonts';
 import { renderReportPdf } from '@/lib/reports/render-pdf';
-import { compare, ms, type Measured, type Pairs } from './measure';
+import { compareAll, ms, type Measured } from './measure';
 import { largeReport } from './report';
 
 const ROUNDS = 5;
@@ -21,17 +21,22 @@ export async function pdfRows(): Promise<Measured[]> {
   const plain = await plainOf(pdf, [...photos.values()]);
   const { findings, log } = snapshot;
   const what = `report PDF, ${pages} pages, ${photos.size} photos of 1024 px, ${findings.length} findings, ${log.length} receptacles`;
-  const row = (floor: string, { floorMs, productMs, ratio }: Pairs, bar: string): Measured => ({
+  const against = [
+    { name: 'bare react-pdf', work: () => bareReactPdf(plain), bar: 'at most 1.3' },
+    { name: 'pdfkit', work: () => barePdfkit(plain), bar: 'printed' },
+  ];
+  const pairs = await compareAll(
+    ROUNDS,
+    against.map(({ work }) => work),
+    report,
+  );
+  return pairs.map(({ floorMs, productMs, ratio }, index) => ({
     what,
     product: ms(productMs),
-    floor: `${floor}, ${ms(floorMs)}`,
+    floor: `${against[index]?.name}, ${ms(floorMs)}`,
     ratio,
-    bar,
-  });
-  return [
-    row('bare react-pdf', await compare(ROUNDS, () => bareReactPdf(plain), report), 'at most 1.3'),
-    row('pdfkit', await compare(ROUNDS, () => barePdfkit(plain), report), 'printed'),
-  ];
+    bar: against[index]?.bar ?? '',
+  }));
 }
 
 async function plainOf(pdf: Buffer, photos: Buffer[]): Promise<Plain> {
