@@ -19,15 +19,17 @@ export function engineRows(): Measured[] {
   return [row('every reading new', first), row('readings seen before', again)];
 }
 
+/** Of this process's own core time in ms: the floor is a number, so nothing else would take out what others run beside it. */
 function timeOf(facts: InspectionFacts): number {
-  const start = performance.now();
+  const start = process.cpuUsage();
   evaluateInspection(facts);
-  return performance.now() - start;
+  const { user, system } = process.cpuUsage(start);
+  return (user + system) / 1000;
 }
 
 function row(which: string, productMs: number): Measured {
   return {
-    what: `evaluateInspection, ${RECEPTACLES} receptacles, ${which}`,
+    what: `evaluateInspection, ${RECEPTACLES} receptacles, core time, ${which}`,
     product: ms(productMs),
     floor: `1 ms a receptacle, ${RECEPTACLES} ms`,
     ratio: productMs / RECEPTACLES,
