@@ -3,7 +3,7 @@ import type { MetadataRoute } from 'next';
 /** Installable on a phone; on iOS what Walk keeps lasts only in an installed app. */
 export default function manifest(): MetadataRoute.Manifest {
   return {
-    id: '/walk',
+    id: '/',
     name: 'Ohmstead',
     short_name: 'Ohmstead',
     description: 'Receptacle, GFCI and AFCI findings for home inspections.',

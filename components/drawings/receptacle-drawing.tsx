@@ -1,7 +1,8 @@
 import type { DeviceKind, SlotPattern, WiringCondition } from '@/lib/findings/vocabulary';
 import { buttonDeviceDrawing, faceDrawing, hasButtons } from './face';
 import { readingDrawing, type Ring } from './reading';
-import { LOOKS, type Drawing, type Shape } from './shapes';
+import { ShapeElement } from './shape-element';
+import type { Drawing } from './shapes';
 import { wiringDrawing } from './wiring';
 
 type View =
@@ -45,47 +46,5 @@ export function drawingOf(what: { pattern: SlotPattern } & View, size?: number):
       return readingDrawing({ ...what, pad: true });
     case 'wiring':
       return wiringDrawing(what.pattern, what.condition);
-  }
-}
-
-function ShapeElement({ shape, line }: { shape: Shape; line: number }) {
-  const look = LOOKS[shape.role];
-  const width = look.mm ?? (look.line ?? 1) * line;
-  const dash = look.dash?.map((part) => (look.mm ? part : part * line)).join(' ');
-  const paint = {
-    fill: look.fill ? `var(--${look.fill})` : 'none',
-    stroke: look.stroke ? `var(--${look.stroke})` : 'none',
-    style: look.stroke ? { strokeWidth: look.mm ? width : `calc(${width}px * var(--thick))` } : undefined,
-    strokeDasharray: dash,
-    strokeLinecap: look.butt ? ('butt' as const) : ('round' as const),
-    strokeLinejoin: 'round' as const,
-  };
-  switch (shape.kind) {
-    case 'path':
-      return (
-        <path
-          {...paint}
-          d={shape.d}
-          transform={shape.turn && `rotate(${shape.turn.degrees} ${shape.turn.x} ${shape.turn.y})`}
-        />
-      );
-    case 'circle':
-      return <circle {...paint} cx={shape.cx} cy={shape.cy} r={shape.r} />;
-    case 'rect':
-      return <rect {...paint} x={shape.x} y={shape.y} width={shape.width} height={shape.height} rx={shape.rx} />;
-    case 'text':
-      return (
-        <text
-          aria-hidden="true"
-          x={shape.x}
-          y={shape.y}
-          fontSize={shape.size}
-          fontWeight={700}
-          textAnchor="middle"
-          fill={paint.fill}
-        >
-          {shape.words}
-        </text>
-      );
   }
 }

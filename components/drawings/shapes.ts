@@ -49,13 +49,25 @@ export type Role =
   | 'open'
   | 'bridge'
   | 'flag'
-  | 'flag-text';
+  | 'flag-text'
+  | 'wire'
+  | 'wire-load'
+  | 'wire-core'
+  | 'wire-off'
+  | 'symbol'
+  | 'symbol-line'
+  | 'band'
+  | 'tag-box'
+  | 'name'
+  | 'note';
 
 export type Shape =
   | { kind: 'path'; role: Role; d: string; turn?: { degrees: number; x: number; y: number } }
   | { kind: 'circle'; role: Role; cx: number; cy: number; r: number }
   | { kind: 'rect'; role: Role; x: number; y: number; width: number; height: number; rx: number }
-  | { kind: 'text'; role: Role; x: number; y: number; size: number; words: string };
+  | { kind: 'text'; role: Role; x: number; y: number; size: number; words: string; start?: boolean }
+  /** Shapes of another drawing, placed and scaled; its lines stay as thick as the rest. */
+  | { kind: 'group'; x: number; y: number; scale: number; shapes: Shape[] };
 
 export type Drawing = { box: [x: number, y: number, width: number, height: number]; shapes: Shape[]; label: string };
 
@@ -80,6 +92,7 @@ export type Look = {
   mm?: number;
   dash?: [number, number];
   butt?: boolean;
+  light?: boolean;
 };
 
 export const LOOKS: Record<Role, Look> = {
@@ -133,6 +146,16 @@ export const LOOKS: Record<Role, Look> = {
   bridge: { stroke: 'ink', line: 1 },
   flag: { fill: 'inverse', stroke: 'paper', line: 0.6 },
   'flag-text': { fill: 'on-inverse' },
+  wire: { stroke: 'ink', mm: 2 },
+  'wire-load': { stroke: 'ink', mm: 6 },
+  'wire-core': { stroke: 'paper', mm: 2.4 },
+  'wire-off': { stroke: 'ink', mm: 2.5, dash: [5, 6] },
+  symbol: { fill: 'sheet', stroke: 'ink', mm: 1.5 },
+  'symbol-line': { stroke: 'ink', mm: 2.2 },
+  band: { stroke: 'rule', mm: 1.5, dash: [2, 5] },
+  'tag-box': { fill: 'paper' },
+  name: { fill: 'ink' },
+  note: { fill: 'ink-2', light: true },
 };
 
 /** Two decimals are a hundredth of a millimetre. */

@@ -1,5 +1,6 @@
-import { Circle, Path, Rect, Svg, Text } from '@react-pdf/renderer';
+import { Circle, G, Path, Rect, Svg, Text } from '@react-pdf/renderer';
 import { LOOKS, type Drawing, type Shape, type Token } from '@/components/drawings/shapes';
+import { SANS } from './report-styles';
 
 /** Paper is white in print; the rest are the light theme's values. */
 const INK: Record<Token, string> = {
@@ -32,6 +33,14 @@ export function PdfReceptacle({ drawing, width }: { drawing: Drawing; width: num
 }
 
 function PdfShape({ shape, line }: { shape: Shape; line: number }) {
+  if (shape.kind === 'group')
+    return (
+      <G transform={`translate(${shape.x} ${shape.y}) scale(${shape.scale})`}>
+        {shape.shapes.map((part, i) => (
+          <PdfShape key={i} shape={part} line={line / shape.scale} />
+        ))}
+      </G>
+    );
   const look = LOOKS[shape.role];
   const paint = {
     fill: look.fill ? INK[look.fill] : 'none',
@@ -69,9 +78,9 @@ function PdfShape({ shape, line }: { shape: Shape; line: number }) {
         <Text
           x={shape.x}
           y={shape.y}
-          textAnchor="middle"
+          textAnchor={shape.start ? 'start' : 'middle'}
           fill={paint.fill}
-          style={{ fontFamily: 'Atkinson Hyperlegible', fontWeight: 700, fontSize: shape.size }}
+          style={{ fontFamily: SANS, fontWeight: look.light ? 400 : 700, fontSize: shape.size }}
         >
           {shape.words}
         </Text>

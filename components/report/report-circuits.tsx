@@ -1,6 +1,8 @@
 import { Text, View } from '@react-pdf/renderer';
 import type { SnapshotCircuit } from '@/lib/schemas/snapshot';
+import { PdfFeed } from './pdf-feed';
 import type { ReportPrint } from './report-context';
+import { feedTrees, feedWords } from './report-feed';
 import { Anchor, ReportPage } from './report-page';
 import { TableHead } from './report-parts';
 import { styles } from './report-styles';
@@ -16,19 +18,25 @@ export function ReportCircuits({ print }: { print: ReportPrint }) {
     <ReportPage print={print} title={messages.circuits.title}>
       <Anchor print={print} id="circuits" />
       <Text style={styles.h1}>{messages.circuits.title}</Text>
-      <Text style={styles.lead}>{messages.circuits.lead}</Text>
+      <Text style={styles.lead}>{`${messages.circuits.lead} ${messages.circuits.key}`}</Text>
       {snapshot.panels.map((panel) => (
         <View key={panel.id}>
           <View style={styles.section} wrap={false} minPresenceAhead={60}>
             <Text style={styles.h2}>{[panel.name, panel.place].filter(Boolean).join(', ')}</Text>
             {panel.fedFromCircuitId && <Text style={styles.small}>{fedFrom(print, panel.fedFromCircuitId)}</Text>}
           </View>
-          <TableHead columns={columns} />
-          {snapshot.circuits
-            .filter((circuit) => circuit.panelId === panel.id)
-            .map((circuit) => (
-              <CircuitRow key={circuit.id} print={print} circuit={circuit} />
-            ))}
+          {/* Its own box, so that the head is repeated only beside rows. */}
+          <View>
+            <TableHead columns={columns} />
+            {snapshot.circuits
+              .filter((circuit) => circuit.panelId === panel.id)
+              .map((circuit) => (
+                <CircuitRow key={circuit.id} print={print} circuit={circuit} />
+              ))}
+          </View>
+          {feedTrees(snapshot, panel, messages).map((tree, index) => (
+            <PdfFeed key={index} tree={tree} words={feedWords(panel, messages)} />
+          ))}
         </View>
       ))}
     </ReportPage>

@@ -1,8 +1,10 @@
+import { FeedDrawing } from '@/components/drawings/feed-drawing';
 import { en } from '@/lib/messages/en';
 import type { Lamp } from '@/lib/findings/vocabulary';
 import type { ReportSnapshot, SnapshotLogRow } from '@/lib/schemas/snapshot';
 import { anchorOf } from './report-facts';
 import { WebHeading } from './web-heading';
+import { feedTrees, feedWords } from './report-feed';
 
 const cell = 'py-2 pr-3 align-top';
 
@@ -98,7 +100,14 @@ export function WebCircuits({ snapshot }: { snapshot: ReportSnapshot }) {
   return (
     <section aria-labelledby="circuits">
       <WebHeading id="circuits">{circuits.title}</WebHeading>
-      <p className="mb-3 max-w-[62ch] font-serif leading-relaxed">{circuits.lead}</p>
+      <p className="mb-3 max-w-[62ch] font-serif leading-relaxed">{`${circuits.lead} ${circuits.key}`}</p>
+      {snapshot.panels.map((panel) =>
+        feedTrees(snapshot, panel, en.report).map((tree, index) => (
+          <figure key={`${panel.id}${index}`} className="mb-4">
+            <FeedDrawing tree={tree} words={feedWords(panel, en.report)} />
+          </figure>
+        )),
+      )}
       <div className="overflow-x-auto" tabIndex={0} role="region" aria-labelledby="circuits">
         <table className="w-full text-left text-s">
           <thead>

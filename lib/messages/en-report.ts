@@ -221,6 +221,9 @@ export const enReport = {
     fedFrom: (panel: string) => `fed from ${panel}`,
     off: 'off when we left',
     poles: 'two-pole',
+    drawing: (panel: string) => `What feeds what from ${panel}. The table says the same in words.`,
+    key: 'Single line: fed. Double line: fed through a GFCI. Broken line: off when we left.',
+    through: (place: string) => `Fed through ${place}`,
   },
   breaker: {
     none: 'none marked',
