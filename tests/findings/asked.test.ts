@@ -64,9 +64,17 @@ describe('how far a sink is', () => {
     expect(gfci({ place: 'bedroom', edition: 2014, ...dry, tubOrShowerFt: 6.1 }).asked).toBe('no');
   });
 
+  test('a pool that nobody measured to matters where one may be beside the point', () => {
+    for (const place of ['pool-area', 'outdoors', 'sunroom', 'accessory-building', 'boathouse'] as const)
+      expect(gfci({ place, edition: 1984, ...dry, poolFt: undefined, gradeAccess: false }).rows, place).toContain(
+        'gf02',
+      );
+    expect(gfci({ place: 'closet', edition: 1984, ...dry, poolFt: undefined }).asked).toBe('no');
+  });
+
   test('a pool reached 15 ft, then 20, and between them the lists differ', () => {
     const pool = (edition: number, poolFt: number) => gfci({ place: 'sunroom', edition, ...dry, poolFt }).asked;
-    expect([pool(1971, 15), pool(1971, 18), pool(1971, 21)]).toEqual(['yes', 'depends', 'no']);
+    expect([pool(1971, 15), pool(1971, 15.1), pool(1971, 21)]).toEqual(['yes', 'depends', 'no']);
     expect([pool(1984, 20), pool(1984, 20.5)]).toEqual(['yes', 'no']);
   });
 });
@@ -105,6 +113,13 @@ describe('an exposure that nobody told', () => {
   ] as [string, Omit<AskedPlace, 'edition'>, number, number, string][])('depends: %s', (_, point, last, first, row) => {
     expect(gfci({ ...told, ...point, edition: last }).asked).toBe('no');
     expect(gfci({ ...told, ...point, edition: first })).toMatchObject({ asked: 'depends', rows: [row], since: first });
+  });
+
+  test('of a sink’s kind depends near it, and is the kitchen’s own in a kitchen', () => {
+    const in2005 = (sinkFt: number) => gfci({ ...told, place: 'other-room', edition: 2005, sinkFt }).asked;
+    expect([in2005(3), in2005(9)]).toEqual(['depends', 'no']);
+    for (const place of ['kitchen-wall', 'dishwasher'] as const)
+      expect(gfci({ ...told, place, edition: 2011, sinkFt: 3 }).asked).toBe('no');
   });
 
   test('is no matter for a sink at which no food is made', () => {
