@@ -150,6 +150,22 @@ describe('the edition of a row asks it, and the edition before does not', () => 
   });
 });
 
+test('a kitchen counter names the whole kitchen from 2023, high [S33a, S33b]', () => {
+  const rows = (edition: number) => protectionAsked({ ...dry, place: 'kitchen-counter', edition }).gfci.rows;
+  expect(rows(2020)).not.toContain('gf18');
+  expect(rows(2023)).toEqual(expect.arrayContaining(['gf17', 'gf18']));
+});
+
+test('a large outlet outdoors or in a garage names the vehicles’ interim amendment of 2017, medium [S51a, S51c]', () => {
+  const at = (place: 'outdoors' | 'garage' | 'closet', edition: number) =>
+    protectionAsked({ ...dry, place, edition, volts: 240, amps: 50 }).gfci.rows;
+  for (const place of ['outdoors', 'garage'] as const) {
+    expect(at(place, 2014), place).toEqual([]);
+    expect(at(place, 2017), place).toEqual(['gf32']);
+  }
+  expect(at('closet', 2017)).toEqual([]);
+});
+
 test('a pool area indoors may be damp, which counts from 2020', () => {
   const rows = (edition: number) => protectionAsked({ ...dry, place: 'pool-area', edition }).gfci.rows;
   expect(rows(2017)).not.toContain('gf26');
