@@ -166,6 +166,24 @@ test('a large outlet outdoors or in a garage names the vehicles’ interim amend
   expect(at('closet', 2017)).toEqual([]);
 });
 
+test('the list before 2020 takes in 20 A and nothing larger; named appliances from 2023 take in 60 A', () => {
+  // High [S32]; the 60 A medium [S33d].
+  const garage = (amps: number) => protectionAsked({ ...dry, place: 'garage', edition: 2017, amps }).gfci.asked;
+  expect([15, 20, 25].map(garage)).toEqual(['yes', 'yes', 'no']);
+  const closet = (amps: number) => protectionAsked({ ...dry, place: 'closet', edition: 2023, amps }).gfci.asked;
+  expect([20, 60, 61].map(closet)).toEqual(['no', 'depends', 'no']);
+});
+
+test('a garage outlet out of reach was excepted until 2008; 8 ft up is out of reach by common practice', () => {
+  const garage = (heightFt: number) => protectionAsked({ ...dry, place: 'garage', edition: 2005, heightFt }).gfci.asked;
+  expect([7.9, 8].map(garage)).toEqual(['yes', 'depends']);
+});
+
+test('a pool area that may be outdoors follows the outdoor rows', () => {
+  const rows = (edition: number) => protectionAsked({ ...dry, place: 'pool-area', edition }).gfci.rows[0];
+  expect([1968, 1971, 1975, 1978, 1993, 1996].map(rows)).toEqual([undefined, 'gf03', 'gf03', 'gf04', 'gf04', 'gf05']);
+});
+
 test('a pool area indoors may be damp, which counts from 2020', () => {
   const rows = (edition: number) => protectionAsked({ ...dry, place: 'pool-area', edition }).gfci.rows;
   expect(rows(2017)).not.toContain('gf26');
