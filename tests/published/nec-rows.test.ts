@@ -184,6 +184,14 @@ test('a pool area that may be outdoors follows the outdoor rows', () => {
   expect([1968, 1971, 1975, 1978, 1993, 1996].map(rows)).toEqual([undefined, 'gf03', 'gf03', 'gf04', 'gf04', 'gf05']);
 });
 
+test('what nobody told of an outdoor pool, a hard-wired unit or an outbuilding makes no “yes”', () => {
+  const asked = (p: AskedPlace) => protectionAsked({ ...dry, ...p }).gfci.asked;
+  for (const edition of [1971, 1978, 1996, 2020]) expect(asked({ place: 'pool-area', edition })).toBe('depends');
+  for (const edition of [2020, 2026])
+    expect(asked({ place: 'outdoors', edition, dedicatedAppliance: true })).toBe('depends');
+  for (const edition of [1996, 2023, 2026]) expect(asked({ place: 'accessory-building', edition })).toBe('depends');
+});
+
 test('a pool area indoors may be damp, which counts from 2020', () => {
   const rows = (edition: number) => protectionAsked({ ...dry, place: 'pool-area', edition }).gfci.rows;
   expect(rows(2017)).not.toContain('gf26');
