@@ -9,6 +9,7 @@ const TABLE: [row: string, verdict: string, protects: string, trial: AfciTrial][
   ['A0', 'incomplete', 'unproven', { button: 'trips' }],
   ['A0', 'incomplete', 'unproven', { button: 'trips', circuitDead: true }],
   ['A0', 'incomplete', 'unproven', { button: 'trips', resets: true }],
+  ['A0', 'incomplete', 'unproven', { button: 'trips', resets: false }],
   ['A1', 'works', 'yes', works],
   ['A1', 'works', 'yes', { ...works, indicator: 'no-trip' }],
   ['A1', 'works', 'yes', { ...works, indicator: 'trips' }],

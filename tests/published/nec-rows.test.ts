@@ -218,3 +218,24 @@ test('arc protection was never listed for a bathroom, garage, outdoors, unfinish
     for (const edition of NEC_EDITIONS)
       expect(protectionAsked({ place, edition, finished: false }).afci.asked, `${place} ${edition}`).toBe('no');
 });
+
+test('a use or a damp that nobody told makes “depends” of arc protection, shutters and weather resistance', () => {
+  const at = (p: AskedPlace) => protectionAsked(p);
+  // af4, high [S35b, S35e]: a finished basement that is lived in counts, and so does an office that is a den.
+  for (const finished of [undefined, true])
+    expect(at({ place: 'basement', edition: 2008, ...(finished ? { finished } : {}) }).afci.asked).toBe('depends');
+  for (const place of ['office', 'other-room', 'wet-bar'] as const) {
+    expect(at({ place, edition: 2008 }).afci.asked, place).toBe('depends');
+    expect(at({ place, edition: 2005 }).afci.asked, place).toBe('no');
+  }
+  // tr1, high [S36a].
+  for (const place of ['accessory-building', 'boathouse', 'pool-area', 'closet'] as const)
+    expect(at({ place, edition: 2008 }).tamperResistant.asked, place).toBe('depends');
+  for (const place of ['attic', 'crawl-space'] as const)
+    expect(at({ place, edition: 2023 }).tamperResistant.asked, place).toBe('no');
+  // wr1, high [S38e].
+  for (const place of ['pool-area', 'boathouse', 'crawl-space', 'accessory-building', 'sunroom'] as const) {
+    expect(at({ place, edition: 2008 }).weatherResistant.asked, place).toBe('depends');
+    expect(at({ place, edition: 2005 }).weatherResistant.asked, place).toBe('no');
+  }
+});
