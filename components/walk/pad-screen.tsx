@@ -12,7 +12,7 @@ import { PhotoButton } from './photo-button';
 import { photosOf } from './photos-screen';
 import { receptacleName, receptaclesOf, skipOf, standingReadings } from './progress';
 import { ReceptacleStrip } from './receptacle-strip';
-import { addressOf, goTo } from './walk-address';
+import { addressOf, goOn } from './walk-address';
 import { WalkButton } from './walk-button';
 
 const CORRECT: LampPattern = { hn: 'lit', hg: 'lit', ng: 'off' };
@@ -49,6 +49,7 @@ export function PadScreen({
   const untouched = Object.values(lamps).every((lamp) => lamp === undefined);
 
   async function log(pattern: LampPattern) {
+    const from = window.location.hash;
     const { id, drafts } = ensureReceptacle(state, area, rows, current);
     const readingId = uuidv7();
     const earlier =
@@ -60,17 +61,18 @@ export function PadScreen({
       words: `${name}, ${loggedWords(pattern, slots)}`,
       undo: undoOf(readingId, id, drafts),
     });
-    if (showsNoFault(pattern, slots)) goTo(inspectionId, { kind: 'area', areaId: area.id });
-    else goTo(inspectionId, { kind: 'result', receptacleId: id });
+    if (showsNoFault(pattern, slots)) goOn(from, inspectionId, { kind: 'area', areaId: area.id });
+    else goOn(from, inspectionId, { kind: 'result', receptacleId: id });
   }
 
   async function skip(reason: SkipReason) {
+    const from = window.location.hash;
     const { id, drafts } = ensureReceptacle(state, area, rows, current);
     const skipId = uuidv7();
     await walk.save([...drafts, { op: 'skip.add', id: skipId, receptacleId: id, reason }]);
     setSkipping(false);
     setLogged({ words: `${name}, skipped`, undo: [{ op: 'skip.remove', id: skipId, base: {} }] });
-    goTo(inspectionId, { kind: 'area', areaId: area.id });
+    goOn(from, inspectionId, { kind: 'area', areaId: area.id });
   }
 
   async function photoSubject() {

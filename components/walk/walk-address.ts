@@ -51,3 +51,8 @@ export function addressOf(inspectionId: string, view: WalkView): string {
 export function goTo(inspectionId: string, view: WalkView): void {
   window.location.hash = addressOf(inspectionId, view);
 }
+
+/** Goes on from the view that `from` names, unless the person has gone elsewhere while something was being saved. */
+export function goOn(from: string, inspectionId: string, view: WalkView): void {
+  if (window.location.hash === from) goTo(inspectionId, view);
+}

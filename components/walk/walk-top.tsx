@@ -56,7 +56,11 @@ export function OutboxLine({ inspectionId, walk }: { inspectionId: string; walk:
     .filter(Boolean)
     .join(' ');
   return (
-    <p role="status" className={words ? 'border-b border-dashed border-rule px-4 py-2 text-s' : 'sr-only'}>
+    // Always there and of one height: a line that came and went would move every button under the thumb.
+    <p
+      role="status"
+      className={`flex min-h-[44px] flex-wrap items-center gap-x-2 border-b px-4 text-s ${words ? 'border-dashed border-rule' : 'border-hairline text-ink-2'}`}
+    >
       {words || 'Everything is backed up.'}{' '}
       {walk.link === 'signed-out' && (
         <a className="font-bold underline" href={`/sign-in?next=${encodeURIComponent(`/walk#${inspectionId}`)}`}>
